@@ -1,0 +1,75 @@
+/** Who is signed in, as far as the shell is concerned. */
+export const roles = ['inspector', 'reviewer', 'customer-quality', 'auditor', 'administrator'] as const;
+export type Role = (typeof roles)[number];
+
+export interface NavigationItem {
+  href: string;
+  /** Name of the message in the namespace 'shell', under 'pages'. */
+  label:
+    | 'today'
+    | 'parts'
+    | 'baskets'
+    | 'runs'
+    | 'exposures'
+    | 'lots'
+    | 'review'
+    | 'shipments'
+    | 'certificates'
+    | 'concessions'
+    | 'rejections'
+    | 'drawings'
+    | 'techniques'
+    | 'equipment'
+    | 'personnel'
+    | 'processChecks'
+    | 'trace'
+    | 'insight'
+    | 'record'
+    | 'people'
+    | 'customers'
+    | 'orders';
+  group: 'work' | 'judgement' | 'basis' | 'history' | 'house';
+  roles: readonly Role[];
+}
+
+const staff = ['inspector', 'reviewer', 'administrator'] as const;
+const judges = ['reviewer', 'administrator'] as const;
+
+/** The pages of the product by role, in the order they are shown. A page that does not exist yet is not listed. */
+export const navigation: readonly NavigationItem[] = [
+  { href: '/', label: 'today', group: 'work', roles },
+  { href: '/parts', label: 'parts', group: 'work', roles: [...staff, 'auditor'] },
+  { href: '/lots', label: 'lots', group: 'work', roles: [...staff, 'auditor'] },
+  { href: '/review', label: 'review', group: 'judgement', roles: ['reviewer'] },
+  { href: '/shipments', label: 'shipments', group: 'judgement', roles: judges },
+  { href: '/certificates', label: 'certificates', group: 'judgement', roles },
+  { href: '/drawings', label: 'drawings', group: 'basis', roles: judges },
+  { href: '/techniques', label: 'techniques', group: 'basis', roles: judges },
+  { href: '/equipment', label: 'equipment', group: 'basis', roles: judges },
+  { href: '/personnel', label: 'personnel', group: 'basis', roles: judges },
+  { href: '/process-checks', label: 'processChecks', group: 'basis', roles: judges },
+  { href: '/trace', label: 'trace', group: 'history', roles: [...staff, 'auditor'] },
+  { href: '/record', label: 'record', group: 'history', roles: ['auditor', 'administrator'] },
+  { href: '/orders', label: 'orders', group: 'house', roles: ['administrator'] },
+  { href: '/customers', label: 'customers', group: 'house', roles: ['administrator'] },
+  { href: '/people', label: 'people', group: 'house', roles: ['administrator'] },
+];
+
+/** The items of a role, grouped, in order. */
+export function navigationFor(role: Role): { group: NavigationItem['group']; items: NavigationItem[] }[] {
+  const groups = new Map<NavigationItem['group'], NavigationItem[]>();
+  for (const item of navigation) {
+    if (item.roles.includes(role)) groups.set(item.group, [...(groups.get(item.group) ?? []), item]);
+  }
+  return [...groups].map(([group, items]) => ({ group, items }));
+}
+
+/** Whether an item is where the reader is: its page or one below it. */
+export function isHere(href: string, path: string): boolean {
+  return href === '/' ? path === '/' : path === href || path.startsWith(`${href}/`);
+}
+
+/** Places that need the whole width: the bench. The rail is behind the menu there. */
+export function isBench(path: string): boolean {
+  return /^\/(inspections|baskets|exposures|runs)\/./.test(path);
+}

@@ -1,0 +1,9 @@
+/**
+ * One line for each feature that has words. The name given here is its namespace:
+ * `export { messages as parts } from '@/components/parts/messages';`
+ */
+export { messages as forms } from '@/components/forms/messages';
+export { messages as grids } from '@/components/grids/messages';
+export { messages as shell } from '@/components/shell/messages';
+export { messages as ui } from '@/components/ui/messages';
+export { messages as viewer } from '@/components/viewer/messages';

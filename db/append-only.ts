@@ -1,0 +1,23 @@
+/** Tables of signed records and of the journal: the application may add rows and read them, nothing else. */
+export const appendOnlyTables = [
+  'inspections',
+  'inspection_ends',
+  'inspection_readings',
+  'inspection_indications',
+  'inspection_equipment',
+  'draft_changes',
+  'dispositions',
+  'releases',
+  'release_parts',
+  'certificate_withdrawals',
+  'certificate_receipts',
+  'evidence',
+  'evidence_checks',
+  'requirements',
+  'calibrations',
+  'process_checks',
+  'vision_tests',
+  'sign_ins',
+  'events',
+  'event_subjects',
+] as const;

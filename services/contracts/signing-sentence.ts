@@ -1,0 +1,28 @@
+import type { EvaluationAnswer } from './evaluate';
+
+const outcome: Readonly<Record<EvaluationAnswer['verdict'], string>> = {
+  accept: 'it conforms to what this operation asks',
+  reject: 'it does not conform to what this operation asks',
+  indeterminate: 'the measurement cannot decide whether it conforms',
+  'not-evaluable': 'this inspection is void, because a process value was outside its window',
+};
+
+export interface SignedSubject {
+  readonly name: string;
+  readonly serial: string;
+  readonly partNumber: string;
+  readonly revision: string;
+  readonly planIssue: number;
+  readonly operation: string;
+  readonly title: string;
+  readonly verdict: EvaluationAnswer['verdict'];
+}
+
+/** The sentence a person signs for an inspection: shown on the bench beforehand, stored as shown. */
+export function inspectionSentence(subject: SignedSubject): string {
+  const { name, serial, partNumber, revision, planIssue, operation, title, verdict } = subject;
+  return `I, ${name}, inspected serial ${serial} of ${partNumber} revision ${revision} in operation ${operation}, ${title}, by plan issue ${String(planIssue)}, and found: ${outcome[verdict]}.`.slice(
+    0,
+    600,
+  );
+}
