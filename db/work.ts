@@ -42,9 +42,10 @@ export async function selectOne<Row extends object>(reading: Reading, sql: strin
 
 /** Parameterised UPDATE, INSERT … SELECT or DELETE; answers the number of rows it touched. */
 export async function execute(work: Work, sql: string, replacements: readonly unknown[] = []): Promise<number> {
-  const [, meta] = await work.sequelize.query(sql, { replacements: [...replacements], transaction: work.transaction });
-  if (typeof meta === 'number') return meta;
-  return (meta as { affectedRows?: number } | undefined)?.affectedRows ?? 0;
+  // The connector answers [packet, undefined] for UPDATE and DELETE, [insertId, affectedRows] for INSERT.
+  const [packet, meta]: unknown[] = await work.sequelize.query(sql, { replacements: [...replacements], transaction: work.transaction });
+  const told = meta ?? packet;
+  return typeof told === 'number' ? told : ((told as { affectedRows?: number } | undefined)?.affectedRows ?? 0);
 }
 
 /** The database server's clock. */
