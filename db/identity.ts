@@ -12,7 +12,10 @@ export function newId(): string {
  */
 export async function nextNumber(work: Work, prefix: string, digits = 5): Promise<string> {
   const year = Number(work.now.slice(0, 4));
-  await execute(work, 'INSERT INTO counters (name, year, value) VALUES (?, ?, 1) ON DUPLICATE KEY UPDATE value = value + 1', [prefix, year]);
+  await execute(work, 'INSERT INTO counters (name, year, value) VALUES (?, ?, 1) ON DUPLICATE KEY UPDATE value = value + 1', [
+    prefix,
+    year,
+  ]);
   const row = await selectOne<{ value: number }>(work, 'SELECT value FROM counters WHERE name = ? AND year = ?', [prefix, year]);
   return `${prefix}-${String(year)}-${String(row?.value ?? 0).padStart(digits, '0')}`;
 }

@@ -1,6 +1,17 @@
 import { execute, type Work } from './work';
 
-export type VersionedTable = 'parts' | 'lots' | 'findings' | 'shipments' | 'certificates' | 'plan_issues' | 'order_lines' | 'accounts' | 'equipment' | 'inspection_drafts' | 'technique_issues';
+export type VersionedTable =
+  | 'parts'
+  | 'lots'
+  | 'findings'
+  | 'shipments'
+  | 'certificates'
+  | 'plan_issues'
+  | 'order_lines'
+  | 'accounts'
+  | 'equipment'
+  | 'inspection_drafts'
+  | 'technique_issues';
 
 /**
  * Takes the rows of `ids` by writing them, in id order, so that two who decide about the same rows queue instead of

@@ -20,11 +20,15 @@ function migrator(owner: Sequelize) {
     })),
     storage: {
       logMigration: async ({ name }) => {
-        await owner.query('INSERT INTO schema_migrations (name, applied_at) VALUES (?, UTC_TIMESTAMP(6))', { replacements: [name] });
+        await owner.query('INSERT INTO schema_migrations (name, applied_at) VALUES (?, UTC_TIMESTAMP(6))', {
+          replacements: [name],
+        });
       },
       unlogMigration: () => Promise.reject(new Error('a migration is never undone; write the next one')),
       executed: async () => {
-        const rows = await owner.query<{ name: string }>('SELECT name FROM schema_migrations ORDER BY name', { type: QueryTypes.SELECT });
+        const rows = await owner.query<{ name: string }>('SELECT name FROM schema_migrations ORDER BY name', {
+          type: QueryTypes.SELECT,
+        });
         return rows.map(({ name }) => name);
       },
     },
@@ -39,12 +43,18 @@ function migrator(owner: Sequelize) {
 export async function migrate(ownerAddress: string, applicationAddress: string): Promise<string[]> {
   const owner = connect(ownerAddress, 1);
   try {
-    const [lock] = await owner.query<{ got: number | null }>(`SELECT GET_LOCK('ringtrue-migrate', 60) AS got`, { type: QueryTypes.SELECT });
+    const [lock] = await owner.query<{ got: number | null }>(`SELECT GET_LOCK('ringtrue-migrate', 60) AS got`, {
+      type: QueryTypes.SELECT,
+    });
     if (lock?.got !== 1) throw new Error('another migration is running and did not end within 60 s');
-    await owner.query('CREATE TABLE IF NOT EXISTS schema_migrations (name VARCHAR(120) PRIMARY KEY, applied_at DATETIME(6) NOT NULL)');
+    await owner.query(
+      'CREATE TABLE IF NOT EXISTS schema_migrations (name VARCHAR(120) PRIMARY KEY, applied_at DATETIME(6) NOT NULL)',
+    );
     const applied = await migrator(owner).up();
     const application = new URL(applicationAddress);
-    const hosts = await owner.query<{ host: string }>(`SELECT SUBSTRING_INDEX(CURRENT_USER(), '@', -1) AS host`, { type: QueryTypes.SELECT });
+    const hosts = await owner.query<{ host: string }>(`SELECT SUBSTRING_INDEX(CURRENT_USER(), '@', -1) AS host`, {
+      type: QueryTypes.SELECT,
+    });
     await grantToApplication(owner, {
       user: decodeURIComponent(application.username),
       host: process.env.RINGTRUE_DATABASE_APP_HOST ?? hosts[0]?.host ?? '%',

@@ -18,7 +18,11 @@ const connection = {
 
 function hashedAdapter(): Adapter {
   const inner = new Mysql2Adapter(connection as never, { user: 'accounts', session: 'sessions' });
-  const open = (session: DatabaseSession, sessionId: string): DatabaseSession => ({ ...session, id: sessionId, expiresAt: new Date(session.expiresAt) });
+  const open = (session: DatabaseSession, sessionId: string): DatabaseSession => ({
+    ...session,
+    id: sessionId,
+    expiresAt: new Date(session.expiresAt),
+  });
   return {
     getSessionAndUser: async (sessionId): Promise<[DatabaseSession | null, DatabaseUser | null]> => {
       const [session, user] = await inner.getSessionAndUser(storedSessionId(sessionId));

@@ -27,7 +27,11 @@ export function sqlTimeOf(iso: string): string {
 }
 
 /** Parameterised SELECT; rows come back as plain objects with the names given in the SQL. */
-export async function select<Row extends object>(reading: Reading, sql: string, replacements: readonly unknown[] = []): Promise<Row[]> {
+export async function select<Row extends object>(
+  reading: Reading,
+  sql: string,
+  replacements: readonly unknown[] = [],
+): Promise<Row[]> {
   return reading.sequelize.query<Row>(sql, {
     type: QueryTypes.SELECT,
     replacements: [...replacements],
@@ -36,14 +40,21 @@ export async function select<Row extends object>(reading: Reading, sql: string, 
 }
 
 /** First row of a SELECT, or undefined. */
-export async function selectOne<Row extends object>(reading: Reading, sql: string, replacements: readonly unknown[] = []): Promise<Row | undefined> {
+export async function selectOne<Row extends object>(
+  reading: Reading,
+  sql: string,
+  replacements: readonly unknown[] = [],
+): Promise<Row | undefined> {
   return (await select<Row>(reading, sql, replacements))[0];
 }
 
 /** Parameterised UPDATE, INSERT … SELECT or DELETE; answers the number of rows it touched. */
 export async function execute(work: Work, sql: string, replacements: readonly unknown[] = []): Promise<number> {
   // The connector answers [packet, undefined] for UPDATE and DELETE, [insertId, affectedRows] for INSERT.
-  const [packet, meta]: unknown[] = await work.sequelize.query(sql, { replacements: [...replacements], transaction: work.transaction });
+  const [packet, meta]: unknown[] = await work.sequelize.query(sql, {
+    replacements: [...replacements],
+    transaction: work.transaction,
+  });
   const told = meta ?? packet;
   return typeof told === 'number' ? told : ((told as { affectedRows?: number } | undefined)?.affectedRows ?? 0);
 }
@@ -63,7 +74,11 @@ function replays(error: unknown): boolean {
 }
 
 /** Runs `act` in one transaction and replays the whole of it on deadlock, lock wait or changed record (five tries). */
-export async function inTransaction<T>(actor: Actor | null, act: (work: Work) => Promise<T>, sequelize: Sequelize = database()): Promise<T> {
+export async function inTransaction<T>(
+  actor: Actor | null,
+  act: (work: Work) => Promise<T>,
+  sequelize: Sequelize = database(),
+): Promise<T> {
   for (let attempt = 1; ; attempt += 1) {
     try {
       return await sequelize.transaction(async (transaction) => {

@@ -73,18 +73,31 @@ interface Within {
 
 /** Inserts one row. */
 export async function insert<Row extends object>(work: Within, shape: Table<Row>, row: Partial<Row>): Promise<void> {
-  await modelOf(work.sequelize, shape).create(stored(shape as unknown as Table<object>, row) as never, { transaction: work.transaction });
+  await modelOf(work.sequelize, shape).create(stored(shape as unknown as Table<object>, row) as never, {
+    transaction: work.transaction,
+  });
 }
 
 /** Inserts many rows in one statement. */
-export async function insertAll<Row extends object>(work: Within, shape: Table<Row>, rows: readonly Partial<Row>[]): Promise<void> {
+export async function insertAll<Row extends object>(
+  work: Within,
+  shape: Table<Row>,
+  rows: readonly Partial<Row>[],
+): Promise<void> {
   if (rows.length === 0) return;
   const model = modelOf(work.sequelize, shape);
-  await model.bulkCreate(rows.map((row) => stored(shape as unknown as Table<object>, row)) as never[], { transaction: work.transaction });
+  await model.bulkCreate(rows.map((row) => stored(shape as unknown as Table<object>, row)) as never[], {
+    transaction: work.transaction,
+  });
 }
 
 /** Changes the rows that match `where` (equality only); answers how many changed. */
-export async function update<Row extends object>(work: Within, shape: Table<Row>, change: Partial<Row>, where: Partial<Row>): Promise<number> {
+export async function update<Row extends object>(
+  work: Within,
+  shape: Table<Row>,
+  change: Partial<Row>,
+  where: Partial<Row>,
+): Promise<number> {
   const plain = shape as unknown as Table<object>;
   const [count] = await modelOf(work.sequelize, shape).update(stored(plain, change) as never, {
     where: stored(plain, where) as never,

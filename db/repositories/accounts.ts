@@ -21,8 +21,20 @@ export interface AccountRow {
 }
 
 export const accounts = table<AccountRow>('accounts', {
-  id: 'uuid', email: 'text', name: 'text', role: 'text', releaseAuthority: 'flag', customerId: 'uuid', accessUntil: 'time', passwordHash: 'text',
-  pinHash: 'text', pinFailures: 'int', locale: 'text', disabledAt: 'time', version: 'int', createdAt: 'time',
+  id: 'uuid',
+  email: 'text',
+  name: 'text',
+  role: 'text',
+  releaseAuthority: 'flag',
+  customerId: 'uuid',
+  accessUntil: 'time',
+  passwordHash: 'text',
+  pinHash: 'text',
+  pinFailures: 'int',
+  locale: 'text',
+  disabledAt: 'time',
+  version: 'int',
+  createdAt: 'time',
 });
 
 const columns = `a.id, a.email, a.name, a.role, a.release_authority AS releaseAuthority, a.customer_id AS customerId, c.name AS customerName,

@@ -11,7 +11,14 @@ interface DrawingRow {
   createdAt: string;
 }
 
-export const drawings = table<DrawingRow>('drawings', { id: 'uuid', number: 'text', title: 'text', customerId: 'uuid', version: 'int', createdAt: 'time' });
+export const drawings = table<DrawingRow>('drawings', {
+  id: 'uuid',
+  number: 'text',
+  title: 'text',
+  customerId: 'uuid',
+  version: 'int',
+  createdAt: 'time',
+});
 
 interface RevisionRow {
   id: string;
@@ -21,7 +28,13 @@ interface RevisionRow {
   createdAt: string;
 }
 
-export const drawingRevisions = table<RevisionRow>('drawing_revisions', { id: 'uuid', drawingId: 'uuid', revision: 'text', note: 'text', createdAt: 'time' });
+export const drawingRevisions = table<RevisionRow>('drawing_revisions', {
+  id: 'uuid',
+  drawingId: 'uuid',
+  revision: 'text',
+  note: 'text',
+  createdAt: 'time',
+});
 
 interface Joined {
   id: string;
@@ -42,13 +55,20 @@ function gather(rows: readonly Joined[]): Drawing[] {
   for (const row of rows) {
     let one = found.get(row.id);
     if (!one) {
-      one = { id: row.id, number: row.number, title: row.title, customer: { id: row.customerId, code: row.customerCode, name: row.customerName }, revisions: [] };
+      one = {
+        id: row.id,
+        number: row.number,
+        title: row.title,
+        customer: { id: row.customerId, code: row.customerCode, name: row.customerName },
+        revisions: [],
+      };
       found.set(row.id, one);
     }
     if (row.revisionId === null || row.revision === null) continue;
     let revision = one.revisions.find(({ id }) => id === row.revisionId);
     if (!revision) one.revisions.push((revision = { id: row.revisionId, revision: row.revision, plans: [] }));
-    if (row.planId !== null && row.issue !== null && row.state !== null) revision.plans.push({ id: row.planId, issue: row.issue, state: row.state });
+    if (row.planId !== null && row.issue !== null && row.state !== null)
+      revision.plans.push({ id: row.planId, issue: row.issue, state: row.state });
   }
   return [...found.values()];
 }
@@ -67,10 +87,18 @@ export async function listDrawings(reading: Reading, limit: number, after: strin
 }
 
 export async function drawingByNumber(reading: Reading, number: string): Promise<Drawing | undefined> {
-  return gather(await select<Joined>(reading, `${joined} WHERE d.number = ? ORDER BY r.created_at DESC, p.issue DESC`, [number]))[0];
+  return gather(
+    await select<Joined>(reading, `${joined} WHERE d.number = ? ORDER BY r.created_at DESC, p.issue DESC`, [number]),
+  )[0];
 }
 
 /** A customer by id or code. */
-export async function customerByKey(reading: Reading, key: string): Promise<{ id: string; code: string; name: string } | undefined> {
-  return selectOne(reading, 'SELECT id, code, name FROM customers WHERE code = ? OR CAST(id AS CHAR) = ?', [key, key.toLowerCase()]);
+export async function customerByKey(
+  reading: Reading,
+  key: string,
+): Promise<{ id: string; code: string; name: string } | undefined> {
+  return selectOne(reading, 'SELECT id, code, name FROM customers WHERE code = ? OR CAST(id AS CHAR) = ?', [
+    key,
+    key.toLowerCase(),
+  ]);
 }

@@ -50,7 +50,11 @@ export async function appendEvent(work: Work, event: NewEvent): Promise<string> 
   );
   const row = await selectOne<{ seq: number }>(work, 'SELECT seq FROM events WHERE id = ?', [eventId]);
   for (const subject of [event.subject, ...(event.also ?? [])]) {
-    await execute(work, 'INSERT IGNORE INTO event_subjects (subject_kind, subject_id, event_seq) VALUES (?, ?, ?)', [subject.kind, subject.id, row?.seq ?? 0]);
+    await execute(work, 'INSERT IGNORE INTO event_subjects (subject_kind, subject_id, event_seq) VALUES (?, ?, ?)', [
+      subject.kind,
+      subject.id,
+      row?.seq ?? 0,
+    ]);
   }
   return eventId;
 }

@@ -15,7 +15,14 @@ interface LotRow {
 }
 
 export const lots = table<LotRow>('lots', {
-  id: 'uuid', kind: 'text', number: 'text', quantity: 'int', attributes: 'json', version: 'int', createdBy: 'uuid', createdAt: 'time',
+  id: 'uuid',
+  kind: 'text',
+  number: 'text',
+  quantity: 'int',
+  attributes: 'json',
+  version: 'int',
+  createdBy: 'uuid',
+  createdAt: 'time',
 });
 
 interface ParentRow {
@@ -24,7 +31,10 @@ interface ParentRow {
   fromAt: string;
 }
 
-export const lotParents = table<ParentRow>('lot_parents', { lotId: 'uuid', parentId: 'uuid', fromAt: 'time' }, ['lotId', 'parentId']);
+export const lotParents = table<ParentRow>('lot_parents', { lotId: 'uuid', parentId: 'uuid', fromAt: 'time' }, [
+  'lotId',
+  'parentId',
+]);
 
 type Ref = z.output<typeof lotRef>;
 
@@ -67,30 +77,57 @@ export async function listLots(
     where.push('l.created_at <= ? AND (l.created_at < ? OR l.id < ?)');
     values.push(sqlTimeOf(before[0]), sqlTimeOf(before[0]), before[1]);
   }
-  const rows = await select<Stored>(reading, `SELECT ${columns} FROM lots l WHERE ${where.join(' AND ')} ORDER BY l.created_at DESC, l.id DESC LIMIT ?`, [...values, limit]);
+  const rows = await select<Stored>(
+    reading,
+    `SELECT ${columns} FROM lots l WHERE ${where.join(' AND ')} ORDER BY l.created_at DESC, l.id DESC LIMIT ?`,
+    [...values, limit],
+  );
   return rows.map(toLot);
 }
 
 export async function lotById(reading: Reading, lotId: string): Promise<Lot | undefined> {
   const row = await selectOne<Stored>(reading, `SELECT ${columns} FROM lots l WHERE l.id = ?`, [lotId]);
   if (!row) return undefined;
-  const parents = await select<Ref>(reading, 'SELECT l.id, l.kind, l.number FROM lot_parents e JOIN lots l ON l.id = e.parent_id WHERE e.lot_id = ? ORDER BY l.kind, l.number', [lotId]);
-  const children = await select<Ref>(reading, 'SELECT l.id, l.kind, l.number FROM lot_parents e JOIN lots l ON l.id = e.lot_id WHERE e.parent_id = ? ORDER BY l.kind, l.number LIMIT 500', [lotId]);
+  const parents = await select<Ref>(
+    reading,
+    'SELECT l.id, l.kind, l.number FROM lot_parents e JOIN lots l ON l.id = e.parent_id WHERE e.lot_id = ? ORDER BY l.kind, l.number',
+    [lotId],
+  );
+  const children = await select<Ref>(
+    reading,
+    'SELECT l.id, l.kind, l.number FROM lot_parents e JOIN lots l ON l.id = e.lot_id WHERE e.parent_id = ? ORDER BY l.kind, l.number LIMIT 500',
+    [lotId],
+  );
   return { ...toLot(row), parents, children };
 }
 
 /** Clusters by id or number. */
-export async function clusterByKey(reading: Reading, key: string): Promise<{ id: string; number: string; quantity: number } | undefined> {
-  return selectOne(reading, `SELECT id, number, quantity FROM lots WHERE kind = 'cluster' AND (number = ? OR CAST(id AS CHAR) = ?)`, [key, key.toLowerCase()]);
+export async function clusterByKey(
+  reading: Reading,
+  key: string,
+): Promise<{ id: string; number: string; quantity: number } | undefined> {
+  return selectOne(
+    reading,
+    `SELECT id, number, quantity FROM lots WHERE kind = 'cluster' AND (number = ? OR CAST(id AS CHAR) = ?)`,
+    [key, key.toLowerCase()],
+  );
 }
 
 /** A lot and everything it came from, nearest first. */
 export async function lotsAbove(reading: Reading, lotId: string): Promise<(Ref & { depth: number })[]> {
-  return select(reading, `${aboveLot} SELECT l.id, l.kind, l.number, MIN(a.depth) AS depth FROM above a JOIN lots l ON l.id = a.id GROUP BY l.id, l.kind, l.number ORDER BY depth, l.kind, l.number`, [lotId]);
+  return select(
+    reading,
+    `${aboveLot} SELECT l.id, l.kind, l.number, MIN(a.depth) AS depth FROM above a JOIN lots l ON l.id = a.id GROUP BY l.id, l.kind, l.number ORDER BY depth, l.kind, l.number`,
+    [lotId],
+  );
 }
 
 /** Ids of the parts that came from a lot or any lot below it. */
 export async function partIdsBelow(reading: Reading, lotId: string): Promise<string[]> {
-  const rows = await select<{ id: string }>(reading, `${belowLot} SELECT p.id FROM parts p WHERE p.cluster_id IN (SELECT id FROM below) ORDER BY p.id`, [lotId]);
+  const rows = await select<{ id: string }>(
+    reading,
+    `${belowLot} SELECT p.id FROM parts p WHERE p.cluster_id IN (SELECT id FROM below) ORDER BY p.id`,
+    [lotId],
+  );
   return rows.map(({ id }) => id);
 }

@@ -42,7 +42,13 @@ function conditions(filter: PartsFilter): { where: string[]; values: unknown[] }
 }
 
 /** Parts after a key in the chosen order: by serial, or newest first. */
-export async function listParts(reading: Reading, filter: PartsFilter, sort: 'serial' | 'newest', limit: number, after: readonly [string, string] | null): Promise<PartSummary[]> {
+export async function listParts(
+  reading: Reading,
+  filter: PartsFilter,
+  sort: 'serial' | 'newest',
+  limit: number,
+  after: readonly [string, string] | null,
+): Promise<PartSummary[]> {
   const { where, values } = conditions(filter);
   if (after && sort === 'serial') {
     where.push('p.serial >= ? AND (p.serial > ? OR p.id > ?)');

@@ -23,8 +23,22 @@ export interface PartRow {
 }
 
 export const parts = table<PartRow>('parts', {
-  id: 'uuid', drawingId: 'uuid', serial: 'text', planIssueId: 'uuid', customerId: 'uuid', clusterId: 'uuid', position: 'text', state: 'text', held: 'flag',
-  metCount: 'int', requirementCount: 'int', nextRequirement: 'text', openFindings: 'int', releaseCycle: 'int', version: 'int', createdAt: 'time',
+  id: 'uuid',
+  drawingId: 'uuid',
+  serial: 'text',
+  planIssueId: 'uuid',
+  customerId: 'uuid',
+  clusterId: 'uuid',
+  position: 'text',
+  state: 'text',
+  held: 'flag',
+  metCount: 'int',
+  requirementCount: 'int',
+  nextRequirement: 'text',
+  openFindings: 'int',
+  releaseCycle: 'int',
+  version: 'int',
+  createdAt: 'time',
 });
 
 export interface PartRequirementRow {

@@ -23,8 +23,22 @@ export interface PlanIssueRow {
 }
 
 export const planIssues = table<PlanIssueRow>('plan_issues', {
-  id: 'uuid', drawingRevisionId: 'uuid', issue: 'int', state: 'text', content: 'json', contentDigest: 'text', preparedBy: 'uuid', preparedAt: 'time',
-  checkedBy: 'uuid', checkedAt: 'time', approvedBy: 'uuid', approvedAt: 'time', endedBy: 'uuid', endedAt: 'time', endedReason: 'text', version: 'int',
+  id: 'uuid',
+  drawingRevisionId: 'uuid',
+  issue: 'int',
+  state: 'text',
+  content: 'json',
+  contentDigest: 'text',
+  preparedBy: 'uuid',
+  preparedAt: 'time',
+  checkedBy: 'uuid',
+  checkedAt: 'time',
+  approvedBy: 'uuid',
+  approvedAt: 'time',
+  endedBy: 'uuid',
+  endedAt: 'time',
+  endedReason: 'text',
+  version: 'int',
 });
 
 export interface RequirementRow {
@@ -40,7 +54,15 @@ export interface RequirementRow {
 }
 
 export const requirements = table<RequirementRow>('requirements', {
-  id: 'uuid', planIssueId: 'uuid', position: 'int', key: 'text', operation: 'text', title: 'text', method: 'text', technique: 'text', content: 'json',
+  id: 'uuid',
+  planIssueId: 'uuid',
+  position: 'int',
+  key: 'text',
+  operation: 'text',
+  title: 'text',
+  method: 'text',
+  technique: 'text',
+  content: 'json',
 });
 
 interface Stored {
@@ -107,7 +129,9 @@ export async function planById(reading: Reading, planId: string): Promise<Plan |
 
 /** Plan issues of a drawing, newest revision and issue first. */
 export async function plansOfDrawing(reading: Reading, drawingNumber: string): Promise<Plan[]> {
-  const rows = await select<Stored>(reading, `${query} WHERE d.number = ? ORDER BY r.created_at DESC, p.issue DESC LIMIT 200`, [drawingNumber]);
+  const rows = await select<Stored>(reading, `${query} WHERE d.number = ? ORDER BY r.created_at DESC, p.issue DESC LIMIT 200`, [
+    drawingNumber,
+  ]);
   return rows.map(toPlan);
 }
 

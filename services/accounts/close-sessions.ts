@@ -10,6 +10,12 @@ export async function closeSessions(work: Work & { readonly actor: Actor }, ever
   return {
     answer: undefined,
     headers: { 'set-cookie': lucia.createBlankSessionCookie().serialize() },
-    events: [{ ...(everywhere ? { kind: 'signed-out-everywhere' as const } : {}), subject: { kind: 'account', id: work.actor.id }, details: {} }],
+    events: [
+      {
+        ...(everywhere ? { kind: 'signed-out-everywhere' as const } : {}),
+        subject: { kind: 'account', id: work.actor.id },
+        details: {},
+      },
+    ],
   };
 }

@@ -11,7 +11,10 @@ const pinTries = 5;
  * The person's own password (or, for bench work, PIN) at the moment of signing. Five wrong PINs lock the PIN until
  * the password is used. Problems: signature-refused, too-many-attempts. Call before the signing transaction opens.
  */
-export async function confirmSignature(actor: Actor, proof: { readonly password?: string | undefined; readonly pin?: string | undefined }): Promise<void> {
+export async function confirmSignature(
+  actor: Actor,
+  proof: { readonly password?: string | undefined; readonly pin?: string | undefined },
+): Promise<void> {
   const account = await accountById(reading(), actor.id);
   if (!account || account.disabledAt !== null) throw new Problem('not-signed-in', 'This account is closed.');
   if (proof.password !== undefined) return confirmPassword(account.id, account.email, account.passwordHash, proof.password);
@@ -22,22 +25,41 @@ export async function confirmSignature(actor: Actor, proof: { readonly password?
 async function confirmPassword(accountId: string, email: string, stored: string, password: string): Promise<void> {
   const address = `signature:${accountId}`;
   const wait = await inTransaction(null, (work) => secondsToWait(work, email, address));
-  if (wait > 0) throw new Problem('too-many-attempts', `Too many wrong passwords. Try again in ${String(wait / 60)} minutes.`, [], { retryAfterS: wait });
+  if (wait > 0)
+    throw new Problem('too-many-attempts', `Too many wrong passwords. Try again in ${String(wait / 60)} minutes.`, [], {
+      retryAfterS: wait,
+    });
   if (await passwordMatches(stored, password)) {
-    await inTransaction(null, (work) => execute(work, 'UPDATE accounts SET pin_failures = 0 WHERE id = ? AND pin_failures > 0', [accountId]));
+    await inTransaction(null, (work) =>
+      execute(work, 'UPDATE accounts SET pin_failures = 0 WHERE id = ? AND pin_failures > 0', [accountId]),
+    );
     return;
   }
   await inTransaction(null, (work) => rememberAttempt(work, { email, accountId, address, outcome: 'refused' }));
-  throw new Problem('signature-refused', 'The password is wrong. Nothing was signed; what you entered is kept.', [{ path: 'password', message: 'is wrong' }]);
+  throw new Problem('signature-refused', 'The password is wrong. Nothing was signed; what you entered is kept.', [
+    { path: 'password', message: 'is wrong' },
+  ]);
 }
 
 async function confirmPin(accountId: string, stored: string | null, failures: number, pin: string): Promise<void> {
-  if (stored === null) throw new Problem('signature-refused', 'No PIN is set for this account. Sign with the password.', [{ path: 'pin', message: 'no PIN is set; use the password' }]);
-  if (failures >= pinTries) throw new Problem('signature-refused', 'The PIN is locked after five wrong tries. Sign with the password.', [{ path: 'pin', message: 'is locked; use the password' }]);
+  if (stored === null)
+    throw new Problem('signature-refused', 'No PIN is set for this account. Sign with the password.', [
+      { path: 'pin', message: 'no PIN is set; use the password' },
+    ]);
+  if (failures >= pinTries)
+    throw new Problem('signature-refused', 'The PIN is locked after five wrong tries. Sign with the password.', [
+      { path: 'pin', message: 'is locked; use the password' },
+    ]);
   if (await passwordMatches(stored, pin)) {
-    await inTransaction(null, (work) => execute(work, 'UPDATE accounts SET pin_failures = 0 WHERE id = ? AND pin_failures > 0', [accountId]));
+    await inTransaction(null, (work) =>
+      execute(work, 'UPDATE accounts SET pin_failures = 0 WHERE id = ? AND pin_failures > 0', [accountId]),
+    );
     return;
   }
-  await inTransaction(null, (work) => execute(work, 'UPDATE accounts SET pin_failures = pin_failures + 1 WHERE id = ?', [accountId]));
-  throw new Problem('signature-refused', 'The PIN is wrong. Nothing was signed; what you entered is kept.', [{ path: 'pin', message: 'is wrong' }]);
+  await inTransaction(null, (work) =>
+    execute(work, 'UPDATE accounts SET pin_failures = pin_failures + 1 WHERE id = ?', [accountId]),
+  );
+  throw new Problem('signature-refused', 'The PIN is wrong. Nothing was signed; what you entered is kept.', [
+    { path: 'pin', message: 'is wrong' },
+  ]);
 }

@@ -15,7 +15,14 @@ export async function secondsToWait(work: Work, email: string, address: string):
     work,
     `SELECT (SELECT COUNT(*) FROM sign_ins WHERE email_digest = ? AND outcome = 'refused' AND at > ? - INTERVAL ? MINUTE) AS byEmail,
             (SELECT COUNT(*) FROM sign_ins WHERE address = ? AND outcome = 'refused' AND at > ? - INTERVAL ? MINUTE) AS byAddress`,
-    [emailDigest(email), sqlTimeOf(work.now), attemptLimits.windowMinutes, address, sqlTimeOf(work.now), attemptLimits.windowMinutes],
+    [
+      emailDigest(email),
+      sqlTimeOf(work.now),
+      attemptLimits.windowMinutes,
+      address,
+      sqlTimeOf(work.now),
+      attemptLimits.windowMinutes,
+    ],
   );
   const limited = (row?.byEmail ?? 0) >= attemptLimits.perEmail || (row?.byAddress ?? 0) >= attemptLimits.perAddress;
   return limited ? attemptLimits.windowMinutes * 60 : 0;
@@ -24,7 +31,12 @@ export async function secondsToWait(work: Work, email: string, address: string):
 /** Keeps that somebody tried; the e-mail only as a digest. */
 export async function rememberAttempt(
   work: Work,
-  attempt: { readonly email: string; readonly accountId: string | null; readonly address: string; readonly outcome: 'signed-in' | 'refused' | 'limited' },
+  attempt: {
+    readonly email: string;
+    readonly accountId: string | null;
+    readonly address: string;
+    readonly outcome: 'signed-in' | 'refused' | 'limited';
+  },
 ): Promise<void> {
   await execute(work, 'INSERT INTO sign_ins (id, account_id, email_digest, address, outcome, at) VALUES (?, ?, ?, ?, ?, ?)', [
     newId(),

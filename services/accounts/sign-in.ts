@@ -21,11 +21,18 @@ export async function checkSignIn(attempt: Attempt): Promise<Account> {
     if (seconds > 0) await rememberAttempt(work, { ...attempt, accountId: null, outcome: 'limited' });
     return seconds;
   });
-  if (wait > 0) throw new Problem('too-many-attempts', `Too many attempts. Try again in ${String(wait / 60)} minutes.`, [], { retryAfterS: wait });
+  if (wait > 0)
+    throw new Problem('too-many-attempts', `Too many attempts. Try again in ${String(wait / 60)} minutes.`, [], {
+      retryAfterS: wait,
+    });
   const account = await accountByEmail(reading(), attempt.email);
   const matches = await passwordMatches(account?.passwordHash ?? null, attempt.password);
   const open = await inTransaction(null, async (work) => {
-    const usable = account !== undefined && matches && account.disabledAt === null && (account.accessUntil === null || account.accessUntil > work.now);
+    const usable =
+      account !== undefined &&
+      matches &&
+      account.disabledAt === null &&
+      (account.accessUntil === null || account.accessUntil > work.now);
     if (!usable) await rememberAttempt(work, { ...attempt, accountId: account?.id ?? null, outcome: 'refused' });
     return usable;
   });
@@ -34,7 +41,11 @@ export async function checkSignIn(attempt: Attempt): Promise<Account> {
 }
 
 /** Opens the session of a checked account and keeps the sign-in; answers the Set-Cookie value. */
-export async function enter(work: Work, account: Account, place: { readonly address: string; readonly agent: string }): Promise<string> {
+export async function enter(
+  work: Work,
+  account: Account,
+  place: { readonly address: string; readonly agent: string },
+): Promise<string> {
   await rememberAttempt(work, { email: account.email, accountId: account.id, address: place.address, outcome: 'signed-in' });
   return openSession(account.id, work.now, place.address, place.agent);
 }

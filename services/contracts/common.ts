@@ -4,7 +4,9 @@ import { z } from 'zod';
 export const id = z.uuid();
 
 /** An entered decimal: kept as text with its digits, never a JSON number (rule N1). */
-export const decimal = z.string().regex(/^-?[0-9]{1,16}(\.[0-9]{1,16})?$/, 'must be a decimal such as 0.75 (digits, one point, no exponent, no grouping)');
+export const decimal = z
+  .string()
+  .regex(/^-?[0-9]{1,16}(\.[0-9]{1,16})?$/, 'must be a decimal such as 0.75 (digits, one point, no exponent, no grouping)');
 
 /** Instant in UTC with microseconds, `2026-03-09T14:05:06.123456Z`. */
 export const instant = z.string();

@@ -26,10 +26,20 @@ export const planRequirement = z.strictObject({
   process: z.array(z.string()).default([]),
   indicationRules: z.array(z.string()).default([]),
   /** Files that must be attached before signing. */
-  evidence: z.array(z.strictObject({ role: z.enum(['radiograph', 'photograph', 'reading-file', 'document']), minimum: z.int().min(1).max(50) })).default([]),
+  evidence: z
+    .array(
+      z.strictObject({ role: z.enum(['radiograph', 'photograph', 'reading-file', 'document']), minimum: z.int().min(1).max(50) }),
+    )
+    .default([]),
   /** Reading a step block before and after is part of the operation. */
   blockCheck: z
-    .strictObject({ unit: z.string(), steps: z.array(z.strictObject({ nominal: z.string(), tolerance: z.string() })).min(1).max(20) })
+    .strictObject({
+      unit: z.string(),
+      steps: z
+        .array(z.strictObject({ nominal: z.string(), tolerance: z.string() }))
+        .min(1)
+        .max(20),
+    })
     .optional(),
   /** Image quality indicator that must be placed and seen. */
   indicator: z.strictObject({ required: words(60) }).optional(),
@@ -47,7 +57,11 @@ export const planRework = z.strictObject({
   reopens: z.array(mark).default([]),
 });
 
-export const effectivity = z.strictObject({ kind: z.enum(['serial', 'lot', 'date']), from: words(60), to: words(60).nullable().default(null) });
+export const effectivity = z.strictObject({
+  kind: z.enum(['serial', 'lot', 'date']),
+  from: words(60),
+  to: words(60).nullable().default(null),
+});
 
 /**
  * The body of a plan issue. `criteria` has the form of POST /api/evaluate and is judged by the engine's own fault

@@ -8,7 +8,11 @@ export const signIn = operation({
   path: '/api/session',
   summary: 'Sign in; 204 and a session cookie. The same 401, after the same time, for anything wrong.',
   changes: true,
-  body: z.strictObject({ email: z.string().min(1).max(200), password: z.string().min(1).max(200), code: z.string().max(12).optional() }),
+  body: z.strictObject({
+    email: z.string().min(1).max(200),
+    password: z.string().min(1).max(200),
+    code: z.string().max(12).optional(),
+  }),
   status: 204,
 });
 

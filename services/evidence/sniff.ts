@@ -45,10 +45,10 @@ const spoken: Readonly<Record<FileKind, string>> = {
 export function sniff(bytes: Buffer, declaredName: string, kind: string): FileKind {
   if (bytes.length === 0) throw new AdmissionRefused('unreadable', 'The file is empty.');
   refuseActive(bytes);
-  const found = kindOf(bytes);
-  if (!found) throw new AdmissionRefused('not-what-it-says', 'The bytes are none of PNG, JPEG, TIFF, DICOM, PDF or text.');
   const ending = /\.([a-z0-9]+)$/i.exec(declaredName)?.[1]?.toLowerCase();
   const said = ending === undefined ? undefined : endings[ending];
+  const found = kindOf(bytes, said);
+  if (!found) throw new AdmissionRefused('not-what-it-says', 'The bytes are none of PNG, JPEG, TIFF, DICOM, PDF or text.');
   if (said && said !== found) {
     throw new AdmissionRefused('not-what-it-says', `The name ends in .${ending ?? ''} but the bytes are ${spoken[found]}.`);
   }
@@ -63,15 +63,17 @@ export function sniff(bytes: Buffer, declaredName: string, kind: string): FileKi
   return found;
 }
 
-function kindOf(bytes: Buffer): FileKind | null {
+/**
+ * DICOM leaves its first 128 bytes free (PS3.10 7.1), and some writers put a TIFF head there: such a file is DICOM
+ * unless its name says TIFF, when it is refused as two things at once.
+ */
+function kindOf(bytes: Buffer, said: FileKind | undefined): FileKind | null {
   const starts = (...values: number[]) => values.every((value, index) => bytes[index] === value);
   if (starts(0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a, 0x1a, 0x0a)) return 'png';
   if (starts(0xff, 0xd8, 0xff)) return 'jpeg';
   if (starts(0x49, 0x49, 0x2a, 0) || starts(0x4d, 0x4d, 0, 0x2a) || starts(0x49, 0x49, 0x2b, 0) || starts(0x4d, 0x4d, 0, 0x2b)) {
-    if (bytes.toString('latin1', 128, 132) === 'DICM') {
-      throw new AdmissionRefused('not-what-it-says', 'The file is TIFF and DICOM at once; send one of them.');
-    }
-    return 'tiff';
+    if (bytes.toString('latin1', 128, 132) !== 'DICM') return 'tiff';
+    if (said === 'tiff') throw new AdmissionRefused('not-what-it-says', 'The file is TIFF and DICOM at once; send one of them.');
   }
   if (bytes.toString('latin1', 128, 132) === 'DICM') return 'dicom';
   if (bytes.toString('latin1', 0, 5) === '%PDF-') return 'pdf';

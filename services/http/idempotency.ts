@@ -13,7 +13,10 @@ interface Asked {
 function keyOf(asked: Asked): string | null {
   const key = asked.request.headers.get('idempotency-key');
   if (key === null) return null;
-  if (!/^[\x21-\x7e]{1,100}$/.test(key)) throw new Problem('invalid-input', 'Idempotency-Key must be 1 to 100 visible ASCII characters.', [{ path: 'Idempotency-Key', message: 'must be 1 to 100 visible ASCII characters' }]);
+  if (!/^[\x21-\x7e]{1,100}$/.test(key))
+    throw new Problem('invalid-input', 'Idempotency-Key must be 1 to 100 visible ASCII characters.', [
+      { path: 'Idempotency-Key', message: 'must be 1 to 100 visible ASCII characters' },
+    ]);
   return key;
 }
 
@@ -39,7 +42,10 @@ export async function replayed(work: Work, contract: Operation, asked: Asked): P
     [work.actor.id, key],
   );
   if (!row || row.digest !== digest) throw new Problem('key-reused', 'This Idempotency-Key was used for another request.');
-  return new Response(row.answer, { status: row.status ?? 200, headers: { 'content-type': 'application/json', 'cache-control': 'no-store', 'idempotent-replay': 'true' } });
+  return new Response(row.answer, {
+    status: row.status ?? 200,
+    headers: { 'content-type': 'application/json', 'cache-control': 'no-store', 'idempotent-replay': 'true' },
+  });
 }
 
 /** Keeps the answer beside its key, in the transaction of the change. */
@@ -47,6 +53,11 @@ export async function rememberAnswer(work: Work, asked: Asked, response: Respons
   const key = keyOf(asked);
   if (key === null || !work.actor) return response;
   const answer = response.status === 204 ? null : await response.clone().text();
-  await execute(work, 'UPDATE idempotency_keys SET status = ?, answer = ? WHERE account_id = ? AND request_key = ?', [response.status, answer, work.actor.id, key]);
+  await execute(work, 'UPDATE idempotency_keys SET status = ?, answer = ? WHERE account_id = ? AND request_key = ?', [
+    response.status,
+    answer,
+    work.actor.id,
+    key,
+  ]);
   return response;
 }

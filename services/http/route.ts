@@ -54,7 +54,13 @@ interface ChangeDeclaration<O extends Operation, W extends Who, P> {
   readonly call: (work: Work & { readonly actor: Caller<W> }, input: Input<O>, prepared: P) => Promise<Recorded<AnswerOf<O>>>;
 }
 
-type Handler = (request: Request, context: { params: Promise<Record<string, string | string[] | undefined>> }) => Promise<Response>;
+type Answering = (
+  request: Request,
+  context: { params: Promise<Record<string, string | string[] | undefined>> },
+) => Promise<Response>;
+
+/** A handler that can be asked what it declared, so that one test holds every route against its permission. */
+export type Handler = Answering & { readonly declared: { readonly contract: Operation; readonly who: Who } };
 
 /**
  * A route handler as a declaration: who may, which contract, which event the journal gets, one call.
@@ -63,11 +69,11 @@ type Handler = (request: Request, context: { params: Promise<Record<string, stri
 export function route<O extends Operation<false>, W extends Who>(declaration: ReadDeclaration<O, W>): Handler;
 export function route<O extends Operation<true>, W extends Who, P = undefined>(declaration: ChangeDeclaration<O, W, P>): Handler;
 export function route(declaration: ReadDeclaration<Operation, Who> | ChangeDeclaration<Operation, Who, unknown>): Handler {
-  return async (request, context) => {
-    const { contract } = declaration;
+  const { contract, who } = declaration;
+  const answer: Answering = async (request, context) => {
     try {
       if (contract.method !== 'GET') refuseForeignOrigin(request);
-      const actor = await permitted(request, declaration.who, contract.name);
+      const actor = await permitted(request, who, contract.name);
       const input = await inputOf(contract, request, await context.params);
       if (declaration.event === null) return await answerRead(declaration, actor, input);
       return await answerChange(declaration, actor, input);
@@ -75,6 +81,7 @@ export function route(declaration: ReadDeclaration<Operation, Who> | ChangeDecla
       return problemResponse(toProblem(error, contract.name));
     }
   };
+  return Object.assign(answer, { declared: { contract, who } });
 }
 
 async function permitted(request: Request, who: Who, call: string): Promise<Actor | null> {
@@ -93,7 +100,8 @@ async function inputOf(contract: Operation, request: Request, params: Record<str
   const parsedQuery = contract.query?.safeParse(query);
   const parsedBody = contract.body && contract.bodyKind !== 'stream' ? contract.body.safeParse(body ?? {}) : undefined;
   const errors = [...fieldErrors(parsedQuery), ...fieldErrors(parsedBody)];
-  if (errors.length > 0) throw new Problem('invalid-input', errors.map(({ path, message }) => `${path || 'body'}: ${message}`).join('; '), errors);
+  if (errors.length > 0)
+    throw new Problem('invalid-input', errors.map(({ path, message }) => `${path || 'body'}: ${message}`).join('; '), errors);
   const match = /^(?:W\/)?"?(\d+)"?$/.exec(request.headers.get('if-match') ?? '');
   return {
     params: parsedParams?.data as never,
@@ -109,18 +117,27 @@ function fieldErrors(parsed: z.ZodSafeParseResult<unknown> | undefined): { path:
   return parsed.error.issues.flatMap((issue) => {
     const path = issue.path.map(String).join('.');
     // An unknown key's path ends in that key, so that the sender finds it.
-    if (issue.code === 'unrecognized_keys') return issue.keys.map((key) => ({ path: path ? `${path}.${key}` : key, message: 'is not a known field' }));
+    if (issue.code === 'unrecognized_keys')
+      return issue.keys.map((key) => ({ path: path ? `${path}.${key}` : key, message: 'is not a known field' }));
     return [{ path, message: issue.message }];
   });
 }
 
-async function answerRead(declaration: ReadDeclaration<Operation, Who>, actor: Actor | null, input: Input<Operation>): Promise<Response> {
+async function answerRead(
+  declaration: ReadDeclaration<Operation, Who>,
+  actor: Actor | null,
+  input: Input<Operation>,
+): Promise<Response> {
   const answer = await declaration.call({ ...reading(), actor }, input);
   if (answer instanceof Raw) return answer.response;
   return jsonResponse(declaration.contract, answer, declaration.contract.status, {});
 }
 
-async function answerChange(declaration: ChangeDeclaration<Operation, Who, unknown>, actor: Actor | null, input: Input<Operation>): Promise<Response> {
+async function answerChange(
+  declaration: ChangeDeclaration<Operation, Who, unknown>,
+  actor: Actor | null,
+  input: Input<Operation>,
+): Promise<Response> {
   const { contract } = declaration;
   const prepared = declaration.prepare ? await declaration.prepare(actor, input) : undefined;
   return inTransaction(actor, async (work) => {

@@ -13,7 +13,12 @@ export type JobKind = keyof JobPayloads;
  * Puts work into the outbox in the transaction of the change that causes it. The same `uniqueKey` twice is one job.
  * Handlers run at least once and must be idempotent. Answers the job's id.
  */
-export async function enqueue<K extends JobKind>(work: Work, kind: K, payload: JobPayloads[K], uniqueKey: string | null = null): Promise<string> {
+export async function enqueue<K extends JobKind>(
+  work: Work,
+  kind: K,
+  payload: JobPayloads[K],
+  uniqueKey: string | null = null,
+): Promise<string> {
   const jobId = newId();
   await execute(
     work,

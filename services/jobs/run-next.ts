@@ -23,7 +23,11 @@ async function take(): Promise<Taken | undefined> {
        ORDER BY run_after LIMIT 1 FOR UPDATE SKIP LOCKED`,
       [sqlTimeOf(work.now), sqlTimeOf(work.now), sqlTimeOf(work.now), leaseMinutes],
     );
-    if (job) await execute(work, `UPDATE jobs SET state = 'running', attempts = attempts + 1, started_at = ? WHERE id = ?`, [sqlTimeOf(work.now), job.id]);
+    if (job)
+      await execute(work, `UPDATE jobs SET state = 'running', attempts = attempts + 1, started_at = ? WHERE id = ?`, [
+        sqlTimeOf(work.now),
+        job.id,
+      ]);
     return job;
   });
 }
@@ -35,11 +39,11 @@ export async function runNext(handlers: Handlers): Promise<boolean> {
   try {
     const result = await handlers[job.kind](JSON.parse(job.payload) as never);
     await inTransaction(null, (work) =>
-      execute(work, `UPDATE jobs SET state = 'done', progress = 100, result = ?, finished_at = ?, last_error = NULL WHERE id = ?`, [
-        JSON.stringify(result ?? null),
-        sqlTimeOf(work.now),
-        job.id,
-      ]),
+      execute(
+        work,
+        `UPDATE jobs SET state = 'done', progress = 100, result = ?, finished_at = ?, last_error = NULL WHERE id = ?`,
+        [JSON.stringify(result ?? null), sqlTimeOf(work.now), job.id],
+      ),
     );
   } catch (error) {
     const message = (error instanceof Error ? `${error.name}: ${error.message}` : String(error)).slice(0, 1000);
@@ -47,7 +51,13 @@ export async function runNext(handlers: Handlers): Promise<boolean> {
     const state = job.attempts + 1 >= mostAttempts ? 'failed' : 'waiting';
     const waitSeconds = Math.min(600, 2 ** (job.attempts + 1));
     await inTransaction(null, (work) =>
-      execute(work, 'UPDATE jobs SET state = ?, last_error = ?, run_after = ? + INTERVAL ? SECOND WHERE id = ?', [state, message, sqlTimeOf(work.now), waitSeconds, job.id]),
+      execute(work, 'UPDATE jobs SET state = ?, last_error = ?, run_after = ? + INTERVAL ? SECOND WHERE id = ?', [
+        state,
+        message,
+        sqlTimeOf(work.now),
+        waitSeconds,
+        job.id,
+      ]),
     );
   }
   return true;

@@ -24,7 +24,11 @@ async function takePlan(work: By, planId: string, move: keyof typeof moves): Pro
   const plan = await planById(work, planId);
   if (!plan) throw notFound('Plan issue');
   const allowed: readonly string[] = moves[move].from;
-  if (!allowed.includes(plan.state)) throw new Problem('state-refused', `Plan issue ${String(plan.issue)} is ${plan.state}; only ${allowed.join(' or ')} can make this move.`);
+  if (!allowed.includes(plan.state))
+    throw new Problem(
+      'state-refused',
+      `Plan issue ${String(plan.issue)} is ${plan.state}; only ${allowed.join(' or ')} can make this move.`,
+    );
   return plan;
 }
 
@@ -34,7 +38,12 @@ async function answered(work: By, plan: Plan, details: Record<string, unknown>):
   return {
     answer,
     headers: { etag: `"${String(answer.version)}"` },
-    events: [{ subject: { kind: 'plan', id: plan.id }, details: { drawing: plan.drawing, revision: plan.revision, issue: plan.issue, ...details } }],
+    events: [
+      {
+        subject: { kind: 'plan', id: plan.id },
+        details: { drawing: plan.drawing, revision: plan.revision, issue: plan.issue, ...details },
+      },
+    ],
   };
 }
 
@@ -42,7 +51,11 @@ async function answered(work: By, plan: Plan, details: Record<string, unknown>):
 export async function changePlan(work: By, planId: string, body: PlanContent, ifMatch: number | null): Promise<Recorded<Plan>> {
   if (ifMatch === null) throw new Problem('version-needed', 'Send If-Match with the version you read.');
   const plan = await takePlan(work, planId, 'change');
-  if (plan.version - 1 !== ifMatch) throw new Problem('changed-meanwhile', 'Somebody saved this draft since you read it.', [], { present: contentOf(plan), version: plan.version - 1 });
+  if (plan.version - 1 !== ifMatch)
+    throw new Problem('changed-meanwhile', 'Somebody saved this draft since you read it.', [], {
+      present: contentOf(plan),
+      version: plan.version - 1,
+    });
   const content = contentOf(body);
   await update(work, planIssues, { content, contentDigest: planContentDigest(content) }, { id: planId });
   return answered(work, plan, { digest: planContentDigest(content) });
@@ -50,13 +63,19 @@ export async function changePlan(work: By, planId: string, body: PlanContent, if
 
 function refuseFaults(plan: Plan): void {
   const faults = planFaults(contentOf(plan));
-  if (faults.length > 0) throw new Problem('invalid-input', `The plan has ${String(faults.length)} fault(s): ${faults.map(({ path, message }) => `${path} ${message}`).join('; ')}`, faults);
+  if (faults.length > 0)
+    throw new Problem(
+      'invalid-input',
+      `The plan has ${String(faults.length)} fault(s): ${faults.map(({ path, message }) => `${path} ${message}`).join('; ')}`,
+      faults,
+    );
 }
 
 /** A second person states that the draft reads the drawing rightly. */
 export async function checkPlan(work: By, planId: string): Promise<Recorded<Plan>> {
   const plan = await takePlan(work, planId, 'check');
-  if (plan.prepared?.id === work.actor.id) throw new Problem('not-permitted', 'A plan issue is checked by a second person, not by who prepared it.');
+  if (plan.prepared?.id === work.actor.id)
+    throw new Problem('not-permitted', 'A plan issue is checked by a second person, not by who prepared it.');
   refuseFaults(plan);
   await update(work, planIssues, { state: 'checked', checkedBy: work.actor.id, checkedAt: work.now }, { id: planId });
   return answered(work, plan, {});
@@ -74,13 +93,25 @@ export async function approvePlan(work: By, planId: string): Promise<Recorded<Pl
     [planId],
   );
   for (const { id } of earlier) {
-    await execute(work, `UPDATE plan_issues SET state = 'superseded', ended_by = ?, ended_at = ?, ended_reason = 'superseded by a newer issue', version = version + 1 WHERE id = ?`, [work.actor.id, sqlTimeOf(work.now), id]);
+    await execute(
+      work,
+      `UPDATE plan_issues SET state = 'superseded', ended_by = ?, ended_at = ?, ended_reason = 'superseded by a newer issue', version = version + 1 WHERE id = ?`,
+      [work.actor.id, sqlTimeOf(work.now), id],
+    );
   }
   await insertAll(
     work,
     requirements,
     plan.route.map((row, position) => ({
-      id: newId(), planIssueId: planId, position, key: keyOfRequirement(row), operation: row.operation, title: row.title, method: row.method, technique: row.technique ?? null, content: row,
+      id: newId(),
+      planIssueId: planId,
+      position,
+      key: keyOfRequirement(row),
+      operation: row.operation,
+      title: row.title,
+      method: row.method,
+      technique: row.technique ?? null,
+      content: row,
     })),
   );
   return answered(work, plan, { superseded: earlier.map(({ id }) => id), digest: planContentDigest(contentOf(plan)) });
@@ -89,6 +120,11 @@ export async function approvePlan(work: By, planId: string): Promise<Recorded<Pl
 /** Withdraws an issue because it was wrong; records judged by it stay and become suspect. */
 export async function withdrawPlan(work: By, planId: string, reason: string): Promise<Recorded<Plan>> {
   const plan = await takePlan(work, planId, 'withdraw');
-  await update(work, planIssues, { state: 'withdrawn-for-error', endedBy: work.actor.id, endedAt: work.now, endedReason: reason }, { id: planId });
+  await update(
+    work,
+    planIssues,
+    { state: 'withdrawn-for-error', endedBy: work.actor.id, endedAt: work.now, endedReason: reason },
+    { id: planId },
+  );
   return answered(work, plan, { reason });
 }

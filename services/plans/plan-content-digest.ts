@@ -4,7 +4,9 @@ import { canonicalJson } from '@/services/engine/record/canonical';
 
 /** SHA-256 (hex) of the canonical JSON of a plan's content. */
 export function planContentDigest(content: PlanContent): string {
-  return createHash('sha256').update(canonicalJson(JSON.parse(JSON.stringify(content)))).digest('hex');
+  return createHash('sha256')
+    .update(canonicalJson(JSON.parse(JSON.stringify(content))))
+    .digest('hex');
 }
 
 /** Only the content of a plan that is read with its states. */

@@ -1,10 +1,14 @@
 import type { PlanContent } from '@/services/contracts/plan-content';
-import { criteriaFaults } from '@/services/engine/evaluate/criteria-faults';
+import { criteriaFaults } from '@/services/engine/evaluate/evaluate';
 import type { FieldError } from '@/services/http/problem';
 
 function numbersOf(list: unknown, key: string): Set<string> {
   if (!Array.isArray(list)) return new Set();
-  return new Set(list.map((row: unknown) => (row as Record<string, unknown> | null)?.[key]).filter((value): value is string => typeof value === 'string'));
+  return new Set(
+    list
+      .map((row: unknown) => (row as Record<string, unknown> | null)?.[key])
+      .filter((value): value is string => typeof value === 'string'),
+  );
 }
 
 function duplicates(values: readonly string[]): Set<string> {
@@ -22,20 +26,28 @@ function routeFaults(content: PlanContent): FieldError[] {
     views: new Set(content.views.map(({ name }) => name)),
   };
   const keys = duplicates(content.route.map((row) => keyOfRequirement(row)));
-  const used = { characteristics: new Set<string>(), attributes: new Set<string>(), process: new Set<string>(), indicationRules: new Set<string>() };
-  if (content.route.length === 0) faults.push({ path: 'route', message: 'has no operation: a part of this plan would be releasable at once' });
+  const used = {
+    characteristics: new Set<string>(),
+    attributes: new Set<string>(),
+    process: new Set<string>(),
+    indicationRules: new Set<string>(),
+  };
+  if (content.route.length === 0)
+    faults.push({ path: 'route', message: 'has no operation: a part of this plan would be releasable at once' });
   content.route.forEach((row, place) => {
     if (keys.has(keyOfRequirement(row))) faults.push({ path: `route.${String(place)}.key`, message: 'is used twice' });
     for (const list of ['characteristics', 'attributes', 'process', 'indicationRules', 'views'] as const) {
       row[list].forEach((value, index) => {
-        if (!known[list].has(value)) faults.push({ path: `route.${String(place)}.${list}.${String(index)}`, message: `${value} is not in the plan` });
+        if (!known[list].has(value))
+          faults.push({ path: `route.${String(place)}.${list}.${String(index)}`, message: `${value} is not in the plan` });
         if (list !== 'views') used[list].add(value);
       });
     }
   });
   for (const list of ['characteristics', 'attributes', 'process', 'indicationRules'] as const) {
     [...known[list]].forEach((value, index) => {
-      if (!used[list].has(value)) faults.push({ path: `criteria.${list}.${String(index)}`, message: `${value} is asked by no operation of the route` });
+      if (!used[list].has(value))
+        faults.push({ path: `criteria.${list}.${String(index)}`, message: `${value} is asked by no operation of the route` });
     });
   }
   return faults;
@@ -47,7 +59,9 @@ function viewFaults(content: PlanContent): FieldError[] {
   const zones = Array.isArray(content.criteria.zones) ? content.criteria.zones : [];
   return zones.flatMap((zone: unknown, place) => {
     const view = (zone as { view?: unknown } | null)?.view;
-    return typeof view === 'string' && !names.has(view) ? [{ path: `criteria.zones.${String(place)}.view`, message: `${view} is not a view of the plan` }] : [];
+    return typeof view === 'string' && !names.has(view)
+      ? [{ path: `criteria.zones.${String(place)}.view`, message: `${view} is not a view of the plan` }]
+      : [];
   });
 }
 
@@ -55,7 +69,11 @@ function viewFaults(content: PlanContent): FieldError[] {
 function reworkFaults(content: PlanContent): FieldError[] {
   const keys = new Set(content.route.map(keyOfRequirement));
   return content.rework.flatMap((kind, place) =>
-    kind.reopens.flatMap((key, index) => (keys.has(key) ? [] : [{ path: `rework.${String(place)}.reopens.${String(index)}`, message: `${key} is not an operation of the route` }])),
+    kind.reopens.flatMap((key, index) =>
+      keys.has(key)
+        ? []
+        : [{ path: `rework.${String(place)}.reopens.${String(index)}`, message: `${key} is not an operation of the route` }],
+    ),
   );
 }
 

@@ -1,0 +1,32 @@
+import { selectOne, reading } from '../work';
+import { seedPictures } from './demo-evidence';
+import { seedLots, seedOrders } from './demo-lots';
+import { seedPeople } from './demo-people';
+import { seedPlans, stations } from './demo-plans';
+import { seedEquipment, seedPlant, seedTechniques } from './demo-plant';
+import { seedStory } from './demo-story';
+
+async function timed<T>(what: string, work: () => Promise<T>): Promise<T> {
+  const began = performance.now();
+  const result = await work();
+  console.log(`  ${what}: ${((performance.now() - began) / 1000).toFixed(1)} s`);
+  return result;
+}
+
+/** Fills an empty installation with the demo scenario. Answers false when it is already there. */
+export async function seedDemo(): Promise<boolean> {
+  const present = await selectOne(reading(), `SELECT 1 AS present FROM accounts WHERE email = 'inspector@aldermoor.example'`);
+  if (present) return false;
+  const customers = await timed('plant and customers', seedPlant);
+  const people = await timed('people', () => seedPeople(customers));
+  const gauges = await timed('equipment, checks and techniques', async () => {
+    await seedTechniques(people);
+    return seedEquipment(people, stations);
+  });
+  const plans = await timed('drawings and plans', () => seedPlans(people));
+  const { heats, parts } = await timed('lots and parts', () => seedLots(people, plans));
+  const orderLines = await timed('orders', () => seedOrders(customers));
+  const pictures = await timed('pictures', () => seedPictures(people));
+  await timed('inspections, findings and releases', () => seedStory(people, parts, { gauges, pictures }, { orderLines, heats }));
+  return true;
+}
