@@ -17,6 +17,7 @@ import type { AnswerOf } from '@/services/contracts/operation';
 import { inspectionSentence } from '@/services/contracts/signing-sentence';
 import { notFound, Problem } from '@/services/http/problem';
 import type { Recorded } from '@/services/http/route';
+import { closeFollowedUp } from '@/services/findings/close-followed-up';
 import { recountPart } from '@/services/parts/recount-part';
 import { actsOnRecord, instantOf } from './acts-on-record';
 import { askEngine } from './ask-engine';
@@ -159,6 +160,7 @@ export async function signInspection(
     { state: leadsTo[verdict], inspectionId: draft.id, reason },
     { partId: part.id, position: standing.position },
   );
+  await closeFollowedUp(work, part.id);
   await recountPart(work, part.id);
   const subjects = [{ kind: 'part', id: part.id }, ...findings.map(({ id }) => ({ kind: 'finding', id }))];
   return {
