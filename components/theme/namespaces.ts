@@ -7,3 +7,6 @@ export { messages as grids } from '@/components/grids/messages';
 export { messages as shell } from '@/components/shell/messages';
 export { messages as ui } from '@/components/ui/messages';
 export { messages as viewer } from '@/components/viewer/messages';
+export { messages as accounts } from '@/components/accounts/messages';
+export { messages as parts } from '@/components/parts/messages';
+export { messages as inspections } from '@/components/inspections/messages';

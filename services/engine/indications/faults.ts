@@ -1,13 +1,10 @@
 import type { Fault } from '../evaluate/fault';
-import type { IndicationRule } from '../evaluate/types';
+import type { Criteria, Indication, IndicationRuleSet, Observations, Zone } from '../evaluate/types';
 import {
-  anyText,
   decimalAboveZero,
-  decimalNotNegative,
   fault,
   filledText,
   isObject,
-  joinPath,
   listAt,
   listOf,
   noRepeats,
@@ -21,155 +18,159 @@ import {
   valueAt,
   whole,
   wordName,
-  wordNameOrAll,
-  type Check,
 } from '../form/check';
-import { compare, rationalOf } from '../quantity/decimal';
-import { meaningFaults } from './meaning-faults';
-import { shapeForm } from './shape-form';
+import { ruleSetForm, usesClass } from './forms/rule-form';
+import { shapeForm, simplePolygon } from './forms/shape-form';
+import { drawnZonesOf, markOf } from './mark';
+import { alignmentTooLong } from './rules/places';
+import { covers } from './scene';
+import { rulesOf, surveyOf } from './survey';
 
-/** Rule kinds that are in the contract but not judged yet: refused by name, never approximated. */
-export const unbuiltRuleKinds: readonly string[] = ['max-count-in-window', 'alignment'];
-
-const kinds: readonly IndicationRule['kind'][] = [
-  'not-allowed',
-  'max-size',
-  'size-bands',
-  'max-count',
-  'max-count-in-window',
-  'min-separation',
-  'max-total-length',
-  'max-total-area',
-  'alignment',
-  'max-severity',
-];
-
-const className = oneOf('linear', 'rounded');
-const filter = { kind: required(anyText), class: optional(className), types: optional(listOf(wordNameOrAll, 1)) };
-const count = whole(0, 1_000_000);
-const window = objectOf({ shape: required(oneOf('circle', 'square')), size: required(decimalAboveZero) });
-
-const bands: Check = (value, path, faults) => {
-  const band = objectOf({ to: required(decimalNotNegative), count: requiredOrNull(count) });
-  if (!listOf(band, 1)(value, path, faults)) return false;
-  const edges = (value as { to: string }[]).map(({ to }) => rationalOf(to));
-  let good = true;
-  edges.forEach((edge, at) => {
-    const before = edges[at - 1];
-    if (before && compare(edge, before) <= 0)
-      good = fault(faults, joinPath(joinPath(path, at), 'to'), 'must rise strictly from band to band');
-  });
-  return good;
-};
-
-const forms: Readonly<Record<IndicationRule['kind'], Check>> = {
-  'not-allowed': objectOf({
-    kind: required(anyText),
-    types: optional(listOf(wordNameOrAll, 1)),
-    classes: optional(listOf(className, 1)),
-  }),
-  'max-size': objectOf({ ...filter, limit: required(decimalNotNegative) }),
-  'size-bands': objectOf({ ...filter, counting: required(oneOf('each-band', 'this-band-and-above')), bands: required(bands) }),
-  'max-count': objectOf({ ...filter, limit: required(count) }),
-  'max-count-in-window': objectOf({ ...filter, window: required(window), limit: required(count) }),
-  'min-separation': objectOf({ ...filter, limit: required(decimalNotNegative) }),
-  'max-total-length': objectOf({ ...filter, limit: required(decimalNotNegative), window: optional(window) }),
-  'max-total-area': objectOf({ ...filter, limit: required(decimalNotNegative), window: optional(window) }),
-  alignment: objectOf({
-    ...filter,
-    count: required(whole(2, 1_000_000)),
-    stripWidth: required(decimalAboveZero),
-    gap: required(decimalAboveZero),
-  }),
-  'max-severity': objectOf({
-    ...filter,
-    category: required(filledText),
-    reference: optional(filledText),
-    medium: optional(filledText),
-    plate: optional(filledText),
-    limit: required(count),
-    requiredFor: optional(listOf(wordName, 1)),
-  }),
-};
-
-const rule: Check = (value, path, faults) => {
-  if (!isObject(value)) return fault(faults, path, 'must be an object');
-  const kind = textAt(value, 'kind');
-  const known = kinds.find((one) => one === kind);
-  if (!known)
-    return fault(faults, joinPath(path, 'kind'), kind === undefined ? 'is required' : `must be one of ${kinds.join(', ')}`);
-  if (unbuiltRuleKinds.includes(known)) return fault(faults, joinPath(path, 'kind'), `${known} is not judged by this engine yet`);
-  if (known.startsWith('max-total') && valueAt(value, 'window') !== undefined) {
-    return fault(faults, joinPath(path, 'window'), `${known} in a window is not judged by this engine yet`);
-  }
-  const good = forms[known](value, path, faults);
-  if (known === 'not-allowed' && good && valueAt(value, 'types') === undefined && valueAt(value, 'classes') === undefined) {
-    return fault(faults, joinPath(path, 'types'), 'types or classes must be named');
-  }
-  return good;
-};
-
-const merge: Check = (value, path, faults) => {
-  if (isObject(value) && valueAt(value, 'within') !== undefined)
-    return objectOf({ within: required(decimalAboveZero) })(value, path, faults);
-  return objectOf({ factor: required(decimalAboveZero), of: required(oneOf('larger', 'smaller')) })(value, path, faults);
-};
-
-const ruleSet = objectOf({
-  id: required(filledText),
-  clause: optional(anyText),
-  zones: required(listOf(filledText, 1)),
-  methods: required(listOf(wordNameOrAll, 1)),
-  types: required(listOf(wordNameOrAll, 1)),
-  cracksAllowed: optional(filledText),
-  recordable: optional(decimalNotNegative),
-  merge: optional(merge),
-  rules: optional(listOf(rule)),
-});
-
-const corner: Check = (value, path, faults) => {
-  const good =
-    Array.isArray(value) && value.length === 2 && value.every((one) => Number.isInteger(one) && Math.abs(one as number) <= 1e8);
-  return good ? true : fault(faults, path, 'must be two whole numbers of micrometres');
-};
-
-const zone = objectOf({ id: required(filledText), view: required(filledText), polygon: required(listOf(corner, 3)) });
-const severity = objectOf({
-  category: required(filledText),
-  level: required(count),
-  reference: optional(filledText),
-  medium: optional(filledText),
-  plate: optional(filledText),
-});
-
-const indication = objectOf({
+const linearForm = objectOf({ ratio: required(decimalAboveZero), at: required(oneOf('above', 'at-or-above')) });
+const zoneForm = objectOf({ id: required(filledText), view: required(filledText), polygon: required(simplePolygon) });
+const indicationForm = objectOf({
   id: required(filledText),
   method: required(wordName),
   type: required(wordName),
   view: required(filledText),
   shape: requiredOrNull(shapeForm),
-  severity: optional(severity),
+  severity: optional(
+    objectOf({
+      category: required(filledText),
+      level: required(whole(0, Number.MAX_SAFE_INTEGER)),
+      reference: optional(filledText),
+      medium: optional(filledText),
+      plate: optional(filledText),
+    }),
+  ),
   relevant: optional(objectOf({ is: required(truth), reason: optional(filledText) })),
 });
 
-const linear = objectOf({ ratio: required(decimalAboveZero), at: required(oneOf('above', 'at-or-above')) });
-
-function each(source: unknown, key: string, root: string, check: Check, faults: Fault[]): void {
-  const value = valueAt(source, key);
-  if (value !== undefined) listOf(check)(value, joinPath(root, key), faults);
-  noRepeats(listAt(source, key), 'id', joinPath(root, key), faults);
+/** Checks each item of a list and answers the sound ones with their positions. */
+function soundItems(
+  list: unknown,
+  form: (value: unknown, path: string, faults: Fault[]) => boolean,
+  path: string,
+  faults: Fault[],
+): readonly { readonly item: unknown; readonly index: number }[] {
+  if (list === undefined) return [];
+  if (!Array.isArray(list)) {
+    fault(faults, path, 'must be a list');
+    return [];
+  }
+  return (list as readonly unknown[]).flatMap((item, index) => (form(item, `${path}.${index}`, faults) ? [{ item, index }] : []));
 }
 
-/** Faults of form and meaning in everything that indications are judged by; adds all it finds. Tolerates any value. */
-export function indicationFaults(criteria: unknown, observations: unknown, faults: Fault[]): void {
+function zoneNameFaults(criteria: unknown, faults: Fault[]): void {
+  const known = new Set(listAt(criteria, 'zones').map((zone) => textAt(zone, 'id')));
+  listAt(criteria, 'indicationRules').forEach((set, index) => {
+    const seen = new Set<unknown>();
+    listAt(set, 'zones').forEach((id, place) => {
+      const path = `criteria.indicationRules.${index}.zones.${place}`;
+      if (typeof id !== 'string' || id.trim() === '') return;
+      if (!known.has(id)) fault(faults, path, 'is no zone of the criteria');
+      else if (seen.has(id)) fault(faults, path, 'is named twice');
+      seen.add(id);
+    });
+  });
+}
+
+function unitAndLinearFaults(criteria: unknown, faults: Fault[]): void {
   const unit = valueAt(criteria, 'lengthUnit');
+  const sets = listAt(criteria, 'indicationRules');
   if (unit !== undefined) oneOf('mm', 'in')(unit, 'criteria.lengthUnit', faults);
-  const ratio = valueAt(criteria, 'linear');
-  if (ratio !== undefined) linear(ratio, 'criteria.linear', faults);
-  each(criteria, 'zones', 'criteria', zone, faults);
-  each(criteria, 'indicationRules', 'criteria', ruleSet, faults);
+  else if (sets.length > 0) fault(faults, 'criteria.lengthUnit', 'is required with a rule set');
+  const linear = valueAt(criteria, 'linear');
+  if (linear !== undefined) linearForm(linear, 'criteria.linear', faults);
+  else if (sets.some(usesClass)) fault(faults, 'criteria.linear', 'is required where a rule names a class');
+}
+
+interface Sound {
+  readonly zones: readonly Zone[];
+  readonly sets: readonly IndicationRuleSet[];
+}
+
+function criteriaFaults(criteria: unknown, faults: Fault[]): Sound {
+  unitAndLinearFaults(criteria, faults);
+  const zones = soundItems(valueAt(criteria, 'zones'), zoneForm, 'criteria.zones', faults);
+  noRepeats(listAt(criteria, 'zones'), 'id', 'criteria.zones', faults);
+  const sets = soundItems(valueAt(criteria, 'indicationRules'), ruleSetForm, 'criteria.indicationRules', faults);
+  noRepeats(listAt(criteria, 'indicationRules'), 'id', 'criteria.indicationRules', faults);
+  zoneNameFaults(criteria, faults);
+  return { zones: zones.map(({ item }) => item as Zone), sets: sets.map(({ item }) => item as IndicationRuleSet) };
+}
+
+function methodFaults(observations: unknown, faults: Fault[]): void {
   const methods = valueAt(observations, 'methods');
-  if (methods !== undefined) listOf(wordName)(methods, 'observations.methods', faults);
-  each(observations, 'indications', 'observations', indication, faults);
-  meaningFaults(criteria, observations, faults);
+  const good = methods === undefined || listOf(wordName)(methods, 'observations.methods', faults);
+  if (!good) return;
+  const carriedOut = new Set(listAt(observations, 'methods'));
+  listAt(observations, 'indications').forEach((item, index) => {
+    const method = textAt(item, 'method');
+    if (method === undefined || carriedOut.has(method) || !wordName(method, '', [])) return;
+    fault(faults, `observations.indications.${index}.method`, 'was not carried out');
+  });
+}
+
+function enteredZoneFaults(criteria: unknown, observations: unknown, faults: Fault[]): void {
+  const views = new Map(listAt(criteria, 'zones').map((zone) => [textAt(zone, 'id'), textAt(zone, 'view')] as const));
+  listAt(observations, 'indications').forEach((item, index) => {
+    const shape = valueAt(item, 'shape');
+    const zone = textAt(shape, 'zone');
+    if (textAt(shape, 'kind') !== 'entered' || zone === undefined || zone.trim() === '') return;
+    const path = `observations.indications.${index}`;
+    const view = textAt(item, 'view');
+    if (!views.has(zone)) fault(faults, `${path}.shape.zone`, 'is no zone of the criteria');
+    else if (view !== undefined && views.get(zone) !== undefined && views.get(zone) !== view) {
+      fault(faults, `${path}.view`, 'is not the view of its zone');
+    }
+  });
+}
+
+/** A type that a covering set does not allow cannot be called not relevant, and nothing can without a reason. */
+function relevanceFaults(indication: unknown, index: number, sound: Sound, isSound: boolean, faults: Fault[]): void {
+  const relevant = valueAt(indication, 'relevant');
+  if (valueAt(relevant, 'is') !== false) return;
+  const path = `observations.indications.${index}.relevant`;
+  if (valueAt(relevant, 'reason') === undefined) fault(faults, `${path}.reason`, 'is required for what is not relevant');
+  if (!isSound) return;
+  const { type } = indication as Indication;
+  const mark = markOf(indication as Indication, 0, drawnZonesOf({ zones: sound.zones }), null);
+  const forbidding = sound.sets.find(
+    (set) =>
+      covers(set, mark, sound.zones) &&
+      rulesOf(set).some(({ rule }) => rule.kind === 'not-allowed' && (rule.types?.includes(type) || rule.types?.includes('*'))),
+  );
+  if (forbidding) fault(faults, path, `rule set ${forbidding.id} does not allow ${type}: it cannot be called not relevant`);
+}
+
+function alignmentFaults(criteria: Criteria, observations: Observations, faults: Fault[]): void {
+  const aligns = (criteria.indicationRules ?? []).some((set) => set.rules?.some((rule) => rule.kind === 'alignment'));
+  if (!aligns || (observations.indications ?? []).length <= 200) return;
+  surveyOf(criteria, observations).sets.forEach((surveyed, at) => {
+    for (const { rule, index } of surveyed.rules) {
+      if (rule.kind !== 'alignment') continue;
+      const tooLong = surveyed.zones.some((zone) => surveyed.scenesOf(zone).some((scene) => alignmentTooLong(rule, scene)));
+      if (!tooLong) continue;
+      const path = `criteria.indicationRules.${at}.rules.${index}`;
+      fault(faults, path, 'alignment among more than 200 indications that hang together by its gap takes too long');
+    }
+  });
+}
+
+/**
+ * Adds every fault of form and meaning of the length unit, linear, zones, rule sets, methods carried out and indications, in one
+ * pass. Either part may be anything; what is absent is not looked at.
+ */
+export function indicationFaults(criteria: unknown, observations: unknown, faults: Fault[]): void {
+  const sound = criteriaFaults(criteria, faults);
+  methodFaults(observations, faults);
+  const list = valueAt(observations, 'indications');
+  const items = soundItems(list, indicationForm, 'observations.indications', faults);
+  noRepeats(listAt(observations, 'indications'), 'id', 'observations.indications', faults);
+  enteredZoneFaults(criteria, observations, faults);
+  const soundAt = new Set(items.map(({ index }) => index));
+  listAt(observations, 'indications').forEach((item, index) => relevanceFaults(item, index, sound, soundAt.has(index), faults));
+  if (faults.length > 0 || !isObject(criteria) || !isObject(observations)) return;
+  alignmentFaults(criteria as Criteria, observations as Observations, faults);
 }

@@ -122,7 +122,7 @@ function joinOnce(
  * Joins marks until none join. A join only ever shortens separations and lengthens lengths, so the end does not depend on the
  * order; what has grown is looked at again until nothing grows.
  */
-function clustersOf(marks: readonly Mark[], distance: MergeDistance, separations: Separations): readonly Cluster[] {
+export function clustersOf(marks: readonly Mark[], distance: MergeDistance, separations: Separations): readonly Cluster[] {
   let clusters: readonly Cluster[] = marks.map(lone);
   let grown = clusters.length;
   while (grown > 0) ({ clusters, grown } = joinOnce(clusters, grown, distance, separations));

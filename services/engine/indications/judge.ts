@@ -3,220 +3,111 @@ import type {
   EvaluationContext,
   IndicationJudgement,
   IndicationRow,
-  IndicationRule,
-  IndicationRuleSet,
   Observations,
   RuleRow,
   Verdict,
+  Zone,
 } from '../evaluate/types';
 import { sentence } from '../sentences/sentence';
-import { groupsOf, type Group } from './groups';
-import { holds, isCovered, membersOf, type Member } from './members';
-import {
-  lengthText,
-  maxCount,
-  maxSize,
-  maxTotal,
-  minSeparation,
-  notAllowed,
-  sizeBands,
-  type Outcome,
-  type ZoneView,
-} from './rule-outcome';
-import { maxSeverity } from './severity';
+import type { Sentence } from '../sentences/sentence';
+import type { Mark } from './mark';
+import { lengthText } from './rounding';
+import { judgeRule, shownOf } from './rules/judge-rule';
+import { covers } from './scene';
+import { surveyOf } from './survey';
+import type { PlacedRule, Survey, SurveyedSet } from './survey';
 
-interface Judged extends Outcome {
-  readonly verdict: Verdict;
-  /** Indications the row waits for. */
-  readonly waits: readonly string[];
-}
+const WORST_FIRST: readonly Verdict[] = ['reject', 'not-evaluable', 'indeterminate'];
 
-const crackRule: IndicationRule = { kind: 'not-allowed', types: ['crack'] };
-const nothing: Outcome = { broken: false, ids: [], measured: null, rank: 0 };
-
-function outcomeOf(view: ZoneView, rule: IndicationRule): Outcome & { readonly waits?: readonly string[] } {
-  switch (rule.kind) {
-    case 'not-allowed':
-      return notAllowed(view, rule);
-    case 'max-size':
-      return maxSize(view, rule);
-    case 'size-bands':
-      return sizeBands(view, rule);
-    case 'max-count':
-      return maxCount(view, rule);
-    case 'min-separation':
-      return minSeparation(view, rule);
-    case 'max-total-length':
-    case 'max-total-area':
-      return maxTotal(view, rule);
-    case 'max-severity':
-      return maxSeverity(view, rule);
-    default:
-      // Unbuilt kinds are refused as faults before anything is judged.
-      throw new Error(`${rule.kind} is not judged`);
+function sentenceOf(row: Omit<RuleRow, 'sentence'>, placedRule: PlacedRule, unit: string, band: number | null): Sentence {
+  const { rule } = placedRule;
+  const indications = row.indications.join(', ');
+  const parameters = { zone: row.zone, measured: row.measured, limit: row.limit, unit, indications };
+  if (row.verdict === 'not-evaluable') return sentence('indication-rule-waits', parameters);
+  const outcome = row.verdict === 'reject' ? 'broken' : 'kept';
+  if (placedRule.index < 0) return sentence(`indication-crack-${outcome}`, parameters);
+  if (row.verdict === 'reject' && row.measured === null) return sentence('indication-rule-broken-already', parameters);
+  if (rule.kind === 'size-bands' && outcome === 'broken') {
+    const edge = rule.bands[band !== null && band >= 0 ? band : rule.bands.length - 1]?.to ?? null;
+    const code = band !== null && band >= 0 ? `indication-size-bands-${rule.counting}` : 'indication-size-bands-above';
+    return sentence(code, { ...parameters, edge });
   }
+  if (rule.kind === 'max-count-in-window' || (rule.kind.startsWith('max-total') && 'window' in rule && rule.window)) {
+    const { shape, size } = (rule as { readonly window: { readonly shape: string; readonly size: string } }).window;
+    return sentence(`indication-${rule.kind}-${shape}-${outcome}`, { ...parameters, size });
+  }
+  return sentence(`indication-${rule.kind}-${outcome}`, parameters);
 }
 
-function needsPlace(rule: IndicationRule): boolean {
-  return rule.kind === 'min-separation' || rule.kind === 'alignment' || 'window' in rule;
+function rowOf(surveyed: SurveyedSet, placedRule: PlacedRule, zone: Zone, survey: Survey, voided: boolean): RuleRow {
+  const { set, methods } = surveyed;
+  const parts = surveyed.scenesOf(zone).map((scene) => judgeRule(placedRule.rule, scene));
+  const worst = WORST_FIRST.find((verdict) => parts.some((part) => part.verdict === verdict)) ?? 'accept';
+  const shown = shownOf(placedRule.rule, parts, survey.unit);
+  const carriedOut = methods.length > 0;
+  const verdict = voided || !carriedOut ? 'not-evaluable' : worst;
+  const breaking = verdict === 'reject' ? parts.flatMap((part) => part.breaking) : [];
+  const row = {
+    rule: set.id,
+    index: placedRule.index,
+    kind: placedRule.rule.kind,
+    zone: zone.id,
+    clause: set.clause ?? null,
+    verdict,
+    indications: [...new Set(breaking)].sort(),
+    measured: carriedOut ? shown.measured : null,
+    limit: shown.limit,
+  } as const;
+  if (voided) return { ...row, sentence: sentence('indication-rule-void', { zone: zone.id }) };
+  if (!carriedOut) return { ...row, sentence: sentence('indication-rule-without-method', { methods: set.methods.join(', ') }) };
+  return { ...row, sentence: sentenceOf(row, placedRule, survey.unit, shown.band) };
 }
 
-/** Indications of the zone whose missing place or scale could change this row (rule I2). */
-function waitsFor(view: ZoneView, rule: IndicationRule, unscaled: readonly Member[]): string[] {
-  const byType = rule.kind === 'not-allowed' && rule.types;
-  const waiting = unscaled.filter(({ indication }) => !byType || holds(rule.types ?? [], indication.type));
-  const present = view.groups
-    .filter(({ judged }) => judged)
-    .flatMap(({ members }) => members)
-    .filter(({ zones }) => zones.includes(view.zone));
-  const placeless = present.filter(
-    ({ indication: { shape } }) => shape?.kind === 'entered' && shape.apart !== true && present.length > 1,
-  );
-  const whole = view.set.merge && rule.kind !== 'max-count' && !byType;
-  if (needsPlace(rule) || whole) waiting.push(...placeless);
-  if (byType) return [];
-  return waiting.map(({ id }) => id);
-}
-
-function judgeView(view: ZoneView, rule: IndicationRule, unscaled: readonly Member[]): Judged {
-  const outcome = outcomeOf(view, rule);
-  const waits = [...waitsFor(view, rule, unscaled), ...(outcome.waits ?? [])];
-  if (outcome.broken) return { ...outcome, verdict: 'reject', waits: [] };
-  if (waits.length > 0) return { ...nothing, verdict: 'not-evaluable', waits };
-  return { ...outcome, verdict: 'accept', waits };
-}
-
-function worse(one: Judged, other: Judged): Judged {
-  const order: readonly Verdict[] = ['accept', 'not-evaluable', 'reject'];
-  const difference = order.indexOf(one.verdict) - order.indexOf(other.verdict);
-  if (difference !== 0) return difference > 0 ? one : other;
-  return other.rank > one.rank ? other : one;
-}
-
-function limitOf(rule: IndicationRule): string | null {
-  if ('limit' in rule) return String(rule.limit);
-  if (rule.kind === 'alignment') return String(rule.count);
-  return null;
-}
-
-function sentenceOf(index: number, rule: IndicationRule, zone: string, judged: Judged | null) {
-  const parameters = {
-    zone,
-    kind: rule.kind,
-    measured: judged?.measured ?? '',
-    limit: limitOf(rule) ?? '',
-    indications: (judged?.waits.length ? judged.waits : (judged?.ids ?? [])).join(', '),
+function listed(mark: Mark, judgedMarks: ReadonlySet<Mark>, groupOf: ReadonlyMap<Mark, string>): IndicationRow {
+  const { sizes } = mark;
+  return {
+    id: mark.indication.id,
+    length: sizes ? lengthText(sizes.lengthNm, 'mm') : null,
+    width: sizes ? lengthText(sizes.widthNm, 'mm') : null,
+    class: mark.class,
+    zones: mark.zones,
+    group: groupOf.get(mark) ?? null,
+    judged: judgedMarks.has(mark),
   };
-  if (!judged) return sentence('rule-not-carried-out', parameters);
-  if (judged.verdict === 'not-evaluable') return sentence('rule-waits', parameters);
-  if (index === -1) return sentence(judged.verdict === 'reject' ? 'crack-rejected' : 'no-crack', parameters);
-  const base = judged.verdict === 'reject' ? 'rule-broken' : 'rule-met';
-  return sentence(judged.measured !== null && limitOf(rule) !== null ? `${base}-measured` : base, parameters);
 }
 
-interface Sorted {
-  readonly method: string;
-  readonly view: string;
-  readonly groups: readonly Group[];
-}
-
-/** One rule set with everything sorted by method and view. */
-class SetInWork {
-  readonly sorted: readonly Sorted[];
-  readonly covered: readonly Member[];
-
-  constructor(
-    readonly criteria: Criteria,
-    readonly set: IndicationRuleSet,
-    members: readonly Member[],
-    views: ReadonlyMap<string, string>,
-  ) {
-    this.covered = members.filter((member) => member.relevant && isCovered(member, set, views));
-    const scaled = this.covered.filter(({ length }) => length !== null);
-    const keys = new Map<string, Member[]>();
-    for (const member of scaled) {
-      const key = JSON.stringify([member.indication.method, member.indication.view]);
-      keys.set(key, [...(keys.get(key) ?? []), member]);
-    }
-    this.sorted = [...keys].map(([key, list]) => {
-      const [method = '', view = ''] = JSON.parse(key) as string[];
-      return { method, view, groups: groupsOf(criteria, set, list) };
-    });
-  }
-
-  rows(methods: readonly string[], views: ReadonlyMap<string, string>): RuleRow[] {
-    const { set } = this;
-    const rules: (readonly [number, IndicationRule])[] = (set.rules ?? []).map((rule, index) => [index, rule] as const);
-    const crack = holds(set.types, 'crack') && !set.cracksAllowed ? [[-1, crackRule] as const] : [];
-    return [...crack, ...rules].flatMap(([index, rule]) =>
-      set.zones.map((zone) => this.row(index, rule, zone, methods, views.get(zone) ?? '')),
-    );
-  }
-
-  private row(index: number, rule: IndicationRule, zone: string, methods: readonly string[], zoneView: string): RuleRow {
-    const { set } = this;
-    const asked = methods.filter((method) => holds(set.methods, method));
-    const judged = asked
-      .map((method) => this.judge(rule, zone, method, zoneView))
-      .reduce<Judged | null>((worst, one) => (worst ? worse(worst, one) : one), null);
-    return {
-      rule: set.id,
-      index,
-      kind: rule.kind,
-      zone,
-      clause: set.clause ?? null,
-      verdict: judged?.verdict ?? 'not-evaluable',
-      indications: judged?.ids ?? [],
-      measured: judged?.measured ?? null,
-      limit: limitOf(rule),
-      sentence: sentenceOf(index, rule, zone, judged),
-    };
-  }
-
-  private judge(rule: IndicationRule, zone: string, method: string, zoneView: string): Judged {
-    const groups = this.sorted
-      .filter((one) => one.method === method)
-      .flatMap((one) => one.groups)
-      .filter((group) => group.members.some(({ zones }) => zones.includes(zone)));
-    const unscaled = this.covered.filter(
-      ({ length, indication }) => length === null && indication.method === method && indication.view === zoneView,
-    );
-    const seen = [
-      ...this.covered.filter(({ indication, zones }) => indication.method === method && zones.includes(zone)),
-      ...unscaled,
-    ];
-    return judgeView({ criteria: this.criteria, set: this.set, zone, groups, seen }, rule, unscaled);
-  }
-}
-
-/** Judges indications by every rule set; rows by rule set, rule and zone in criteria order, pass or fail. */
+/**
+ * Judges the indications of a body that has passed its form and meaning checks: each one as measured (by id), every rule row in
+ * criteria order, and the ids of relevant indications that no rule set covers. Source: the drawing's notes as rule sets; clauses
+ * I1 to I11 of the acceptance text.
+ */
 export function judgeIndications(
   criteria: Criteria,
   observations: Observations,
-  _context: EvaluationContext,
+  context: EvaluationContext,
 ): IndicationJudgement {
-  const members = membersOf(criteria, observations);
-  const views = new Map((criteria.zones ?? []).map(({ id, view }) => [id, view]));
-  const sets = (criteria.indicationRules ?? []).map((set) => new SetInWork(criteria, set, members, views));
-  const methods = [...(observations.methods ?? [])];
-  const groups = sets.map(({ sorted }) => sorted.flatMap((one) => one.groups));
-  const rowOf = (member: Member): IndicationRow => {
-    const merged = groups.flat().find((group) => group.members.length > 1 && group.members.includes(member));
-    return {
-      id: member.id,
-      length: member.length === null ? null : lengthText(member.length, 'mm'),
-      width: member.width === null ? null : lengthText(member.width, 'mm'),
-      class: member.class,
-      zones: member.zones,
-      group: merged?.members[0]?.id ?? null,
-      judged: groups.flat().some((group) => group.judged && group.members.includes(member)),
-    };
-  };
+  const survey = surveyOf(criteria, observations);
+  const judgedMarks = new Set<Mark>();
+  const groupOf = new Map<Mark, string>();
+  const rules: RuleRow[] = [];
+  for (const surveyed of survey.sets) {
+    for (const group of surveyed.groups) {
+      const first = group.members[0]?.indication.id;
+      for (const member of group.members) {
+        if (group.judged) judgedMarks.add(member);
+        if (group.members.length > 1 && first !== undefined && !groupOf.has(member)) groupOf.set(member, first);
+      }
+    }
+    for (const placedRule of surveyed.rules) {
+      for (const zone of surveyed.zones) rules.push(rowOf(surveyed, placedRule, zone, survey, context.processOutside));
+    }
+  }
+  const unjudged = survey.marks.filter(
+    (mark) => mark.relevant && !survey.sets.some(({ set, zones }) => covers(set, mark, zones)),
+  );
   return {
-    indications: members.map(rowOf),
-    rules: sets.flatMap((one) => one.rows(methods, views)),
-    unjudged: members
-      .filter((member) => member.relevant && !sets.some(({ covered }) => covered.includes(member)))
-      .map(({ id }) => id),
+    indications: survey.marks.map((mark) => listed(mark, judgedMarks, groupOf)),
+    rules,
+    unjudged: unjudged.map((mark) => mark.indication.id),
   };
 }
