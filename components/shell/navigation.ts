@@ -39,20 +39,10 @@ const judges = ['reviewer', 'administrator'] as const;
 export const navigation: readonly NavigationItem[] = [
   { href: '/', label: 'today', group: 'work', roles },
   { href: '/parts', label: 'parts', group: 'work', roles: [...staff, 'auditor'] },
-  { href: '/lots', label: 'lots', group: 'work', roles: [...staff, 'auditor'] },
   { href: '/review', label: 'review', group: 'judgement', roles: ['reviewer'] },
   { href: '/shipments', label: 'shipments', group: 'judgement', roles: judges },
   { href: '/certificates', label: 'certificates', group: 'judgement', roles },
-  { href: '/drawings', label: 'drawings', group: 'basis', roles: judges },
-  { href: '/techniques', label: 'techniques', group: 'basis', roles: judges },
-  { href: '/equipment', label: 'equipment', group: 'basis', roles: judges },
-  { href: '/personnel', label: 'personnel', group: 'basis', roles: judges },
-  { href: '/process-checks', label: 'processChecks', group: 'basis', roles: judges },
   { href: '/trace', label: 'trace', group: 'history', roles: [...staff, 'auditor'] },
-  { href: '/record', label: 'record', group: 'history', roles: ['auditor', 'administrator'] },
-  { href: '/orders', label: 'orders', group: 'house', roles: ['administrator'] },
-  { href: '/customers', label: 'customers', group: 'house', roles: ['administrator'] },
-  { href: '/people', label: 'people', group: 'house', roles: ['administrator'] },
 ];
 
 /** The items of a role, grouped, in order. */

@@ -70,8 +70,8 @@ export async function listLots(
     values.push(filter.kind);
   }
   if (filter.number) {
-    where.push(`l.number LIKE CONCAT(REPLACE(REPLACE(?, '%', ''), '_', '\\\\_'), '%')`);
-    values.push(filter.number);
+    where.push('l.number LIKE ?');
+    values.push(`${filter.number.replace(/[\\%_]/g, '\\$&')}%`);
   }
   if (before) {
     where.push('l.created_at <= ? AND (l.created_at < ? OR l.id < ?)');

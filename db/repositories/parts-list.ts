@@ -25,8 +25,8 @@ function conditions(filter: PartsFilter): { where: string[]; values: unknown[] }
     values.push(value);
   };
   if (filter.serial) {
-    where.push('p.serial >= ? AND p.serial < CONCAT(?, CHAR(0xF48FBFBF USING utf8mb4))');
-    values.push(filter.serial, filter.serial);
+    where.push('p.serial LIKE ?');
+    values.push(`${filter.serial.replace(/[\\%_]/g, '\\$&')}%`);
   }
   equal('p.state', filter.state);
   equal('d.number', filter.partNumber);

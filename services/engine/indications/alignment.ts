@@ -48,48 +48,57 @@ export function hangingTogether(links: Alignable['links']): readonly (readonly n
 interface Turn {
   readonly at: number;
   readonly normal: Vector;
+  /** Something more may line up past it: a place enters the strip, or two change their order. */
+  readonly gains: boolean;
+  /** Something may line up no more past it. */
+  readonly loses: boolean;
 }
 
-function turnAt(x: number, y: number): Turn {
-  return { at: turnOf(x, y), normal: { x, y } };
+/** A turn of the normal past (x, y) at which a place at `step` from the anchor enters or leaves over the lower or upper border. */
+function crossing(x: number, y: number, step: Vector, upper: boolean): Turn {
+  const rises = x * step.y - y * step.x > 0;
+  const enters = rises !== upper;
+  return { at: turnOf(x, y), normal: { x, y }, gains: enters, loses: !enters };
 }
 
 const NEAR = 1e-3;
 
+/** Turns at which two linked places change their order along the strip: the normal points from one to the other there. */
+function swaps(one: Vector, other: Vector, stripWidth: number): Turn[] {
+  const gap = Math.sqrt((other.x - one.x) ** 2 + (other.y - one.y) ** 2);
+  // Both must fit the width there.
+  if (gap === 0 || gap > stripWidth) return [];
+  return [1, -1].flatMap((sign) => {
+    const n = { x: (sign * (other.x - one.x)) / gap, y: (sign * (other.y - one.y)) / gap };
+    const heights = [n.x * one.x + n.y * one.y, n.x * other.x + n.y * other.y];
+    const inside = heights.every((height) => height > -NEAR && height < stripWidth + NEAR);
+    return inside ? [{ at: turnOf(n.x, n.y), normal: n, gains: true, loses: true }] : [];
+  });
+}
+
 /**
  * Directions of the strip's normal at which, with its lower border through `anchor`, what it holds or the order of two linked
- * places along it changes.
+ * places along it changes, by angle.
  */
 function turnsAbout(anchor: number, part: readonly number[], { places, links }: Alignable, stripWidth: number): Turn[] {
   const from = places[anchor] ?? { x: 0, y: 0 };
   const turns: Turn[] = [];
-  const step = (position: number): Vector => {
+  const stepTo = (position: number): Vector => {
     const place = places[position] ?? from;
     return { x: place.x - from.x, y: place.y - from.y };
   };
   for (const position of part) {
-    const { x, y } = step(position);
-    const size = Math.sqrt(x * x + y * y);
+    const step = stepTo(position);
+    for (const link of links[position] ?? []) if (link.to > position) turns.push(...swaps(step, stepTo(link.to), stripWidth));
+    const size = Math.sqrt(step.x * step.x + step.y * step.y);
     if (size === 0) continue;
-    const u = { x: x / size, y: y / size };
-    turns.push(turnAt(-u.y, u.x), turnAt(u.y, -u.x));
-    if (size >= stripWidth) {
-      const cos = stripWidth / size;
-      const sin = Math.sqrt(Math.max(0, (1 - cos) * (1 + cos)));
-      turns.push(turnAt(u.x * cos - u.y * sin, u.y * cos + u.x * sin), turnAt(u.x * cos + u.y * sin, u.y * cos - u.x * sin));
-    }
-    for (const link of links[position] ?? []) {
-      if (link.to < position) continue;
-      const other = step(link.to);
-      const gap = Math.sqrt((other.x - x) ** 2 + (other.y - y) ** 2);
-      // Two places change their order where the normal points from one to the other: both must fit the width there.
-      if (gap === 0 || gap > stripWidth) continue;
-      for (const sign of [1, -1]) {
-        const n = { x: (sign * (other.x - x)) / gap, y: (sign * (other.y - y)) / gap };
-        const heights = [n.x * x + n.y * y, n.x * other.x + n.y * other.y];
-        if (heights.every((height) => height > -NEAR && height < stripWidth + NEAR)) turns.push(turnAt(n.x, n.y));
-      }
-    }
+    const u = { x: step.x / size, y: step.y / size };
+    turns.push(crossing(-u.y, u.x, step, false), crossing(u.y, -u.x, step, false));
+    if (size < stripWidth) continue;
+    const cos = stripWidth / size;
+    const sin = Math.sqrt(Math.max(0, (1 - cos) * (1 + cos)));
+    turns.push(crossing(u.x * cos - u.y * sin, u.y * cos + u.x * sin, step, true));
+    turns.push(crossing(u.x * cos + u.y * sin, u.y * cos - u.x * sin, step, true));
   }
   return turns.sort((a, b) => a.at - b.at);
 }
@@ -158,6 +167,15 @@ class Search {
   }
 }
 
+/** Half-way from one direction on to another at most half a turn further. */
+function middleOf(from: Vector, to: Vector): Vector {
+  const x = from.x + to.x;
+  const y = from.y + to.y;
+  const size = Math.sqrt(x * x + y * y);
+  // Half a turn apart they have no middle by adding.
+  return size > 1e-9 ? { x: x / size, y: y / size } : { x: -from.y, y: from.x };
+}
+
 /**
  * The longest line-up within any closed strip of `stripWidth` (µm, with half a rounding step), in any direction. A line-up holds in
  * a range of directions that ends where a place leaves the strip or two neighbours change order; between such directions nothing
@@ -172,18 +190,17 @@ export function longestAlignment(field: Alignable, stripWidth: number, count: nu
     for (const anchor of part) {
       const turns = turnsAbout(anchor, part, field, stripWidth);
       steps += 8 * turns.length;
-      for (let index = 0; index < turns.length; index++) {
-        const turn = turns[index];
+      let gained = true;
+      turns.forEach((turn, index) => {
         const next = turns[(index + 1) % turns.length];
-        if (!turn || !next || turn.at === next.at) continue;
-        const x = turn.normal.x + next.normal.x;
-        const y = turn.normal.y + next.normal.y;
-        const size = Math.sqrt(x * x + y * y);
-        // Two turns half a circle apart have no middle by adding: turn the first by a quarter instead.
-        steps += search.look(anchor, size > 1e-9 ? { x: x / size, y: y / size } : { x: -turn.normal.y, y: turn.normal.x });
-        if (steps > stepsAllowed) return { longest: 0, breaking: search.breaking, finished: false };
-      }
+        gained ||= turn.gains;
+        // Until something is lost, what lines up only grows.
+        if (!next || !gained || !next.loses || turn.at === next.at || steps > stepsAllowed) return;
+        gained = false;
+        steps += search.look(anchor, middleOf(turn.normal, next.normal));
+      });
       if (turns.length === 0) steps += search.look(anchor, { x: 0, y: 1 });
+      if (steps > stepsAllowed) return { longest: 0, breaking: search.breaking, finished: false };
     }
   }
   return { longest: search.longest, breaking: search.breaking, finished: true };

@@ -1,4 +1,3 @@
-import type { Vector } from './geometry/points';
 import { turnOf } from './geometry/points';
 
 /** A place with what it weighs (1 when members are counted). */
@@ -14,102 +13,159 @@ export interface WindowFinding {
   readonly breaking: ReadonlySet<number>;
 }
 
-interface Span {
-  readonly start: number;
-  readonly end: number;
-  readonly position: number;
-  readonly weight: number;
+// An event's turn (0 to 4) and its number share one double, so that a plain numeric sort orders them: opening before closing.
+const EVENT_BITS = 2 ** 52;
+
+/** Closed arcs of a circle's centre, seen from one place on its border, from which the circle also holds other places. */
+class Arcs {
+  private readonly keys: Float64Array;
+  private readonly owners: Int32Array;
+  private readonly heavyBefore: Int32Array;
+  private readonly numbers: number;
+  private readonly scale: number;
+  private count = 0;
+
+  constructor(
+    private readonly places: readonly Weight[],
+    private readonly breaking: Set<number>,
+  ) {
+    // An arc over turn 0 is cut in two.
+    const arcs = 2 * places.length;
+    this.keys = new Float64Array(2 * arcs);
+    this.owners = new Int32Array(arcs);
+    this.heavyBefore = new Int32Array(arcs);
+    this.numbers = 2 ** Math.ceil(Math.log2(2 * arcs + 1));
+    this.scale = Math.floor(EVENT_BITS / this.numbers / 4);
+  }
+
+  clear(): void {
+    this.count = 0;
+  }
+
+  private key(turn: number, event: number): number {
+    return Math.floor(turn * this.scale) * this.numbers + event;
+  }
+
+  private add(start: number, end: number, owner: number): void {
+    this.owners[this.count] = owner;
+    this.keys[2 * this.count] = this.key(start, this.count);
+    this.keys[2 * this.count + 1] = this.key(end, this.count + this.numbers / 2);
+    this.count++;
+  }
+
+  /** The arc around a direction (unit vector) whose half-angle has this cosine. */
+  addAround(x: number, y: number, cos: number, owner: number): void {
+    const sin = Math.sqrt(Math.max(0, (1 - cos) * (1 + cos)));
+    const start = turnOf(x * cos + y * sin, y * cos - x * sin);
+    const end = turnOf(x * cos - y * sin, y * cos + x * sin);
+    if (start <= end) this.add(start, end, owner);
+    else {
+      this.add(start, 4, owner);
+      this.add(0, end, owner);
+    }
+  }
+
+  /** The heaviest point of all arcs over a base weight; owners of arcs that hold a point heavier than allowed are breaking. */
+  heaviest(base: number, allowed: number): number {
+    const { numbers } = this;
+    let weight = base;
+    let most = base;
+    let heavy = 0;
+    for (const key of this.keys.subarray(0, 2 * this.count).sort()) {
+      const event = key - Math.floor(key / numbers) * numbers;
+      const arc = event < numbers / 2 ? event : event - numbers / 2;
+      const owner = this.owners[arc] ?? 0;
+      const own = this.places[owner]?.weight ?? 0;
+      if (event < numbers / 2) {
+        this.heavyBefore[arc] = heavy;
+        weight += own;
+        if (weight > most) most = weight;
+        if (weight > allowed) heavy++;
+      } else {
+        // Some opening since this one, or this one itself, was heavy.
+        if (heavy > (this.heavyBefore[arc] ?? 0)) this.breaking.add(owner);
+        weight -= own;
+      }
+    }
+    return most;
+  }
 }
 
-/**
- * Sweeps closed spans along a line, `always` weighing everywhere: the heaviest point, and the spans that hold some point heavier
- * than allowed.
- */
-function sweep(spans: readonly Span[], always: number, allowed: number): { most: number; breaking: readonly number[] } {
-  const events = spans.flatMap((span, index) => [
-    { at: span.start, opens: true, index, weight: span.weight },
-    { at: span.end, opens: false, index, weight: span.weight },
-  ]);
-  // What ends where another starts still holds that point.
-  events.sort((a, b) => a.at - b.at || Number(b.opens) - Number(a.opens));
-  let weight = always;
-  let most = always;
-  let heavy = 0;
-  const heavyBefore: number[] = spans.map(() => 0);
-  const breaking: number[] = [];
-  for (const event of events) {
-    if (event.opens) {
-      heavyBefore[event.index] = heavy;
-      weight += event.weight;
-      most = Math.max(most, weight);
-      if (weight > allowed) heavy++;
-    } else {
-      // Heavy now, or heavy at some opening since this span opened.
-      const span = spans[event.index];
-      if (span && heavy > (heavyBefore[event.index] ?? 0)) breaking.push(span.position);
-      weight -= event.weight;
+/** Coordinates side by side, sorted by y, for loops that look at every pair. */
+interface Sorted {
+  readonly xs: Float64Array;
+  readonly ys: Float64Array;
+  readonly weights: Float64Array;
+  /** The position of each in the list given. */
+  readonly positions: Int32Array;
+}
+
+function sortedByY(places: readonly Weight[]): Sorted {
+  const positions = Int32Array.from(places.keys()).sort((a, b) => (places[a]?.y ?? 0) - (places[b]?.y ?? 0));
+  const of = (key: 'x' | 'y' | 'weight') => Float64Array.from(positions, (position) => places[position]?.[key] ?? 0);
+  return { xs: of('x'), ys: of('y'), weights: of('weight'), positions };
+}
+
+/** Any circle may be shifted until a place it holds lies on its border, so circles through each place in turn are enough. */
+function heaviestCircle(places: readonly Weight[], diameter: number, allowed: number): WindowFinding {
+  const breaking = new Set<number>();
+  const { xs, ys, weights, positions } = sortedByY(places);
+  const arcs = new Arcs(places, breaking);
+  let most = 0;
+  let first = 0;
+  for (let from = 0; from < xs.length; from++) {
+    const fromX = xs[from] ?? 0;
+    const fromY = ys[from] ?? 0;
+    const here: number[] = [];
+    let base = 0;
+    arcs.clear();
+    while (fromY - (ys[first] ?? fromY) > diameter) first++;
+    for (let at = first; at < xs.length; at++) {
+      const x = (xs[at] ?? 0) - fromX;
+      const y = (ys[at] ?? 0) - fromY;
+      if (y > diameter) break;
+      const square = x * x + y * y;
+      if (square === 0) {
+        here.push(positions[at] ?? 0);
+        base += weights[at] ?? 0;
+        continue;
+      }
+      const distance = Math.sqrt(square);
+      if (distance <= diameter) arcs.addAround(x / distance, y / distance, distance / diameter, positions[at] ?? 0);
     }
+    const found = arcs.heaviest(base, allowed);
+    most = Math.max(most, found);
+    if (found > allowed) for (const position of here) breaking.add(position);
   }
   return { most, breaking };
 }
 
-/** Some window may always be shifted until a place it holds lies on its border; so windows through each place are enough. */
-function circlesThrough(places: readonly Weight[], at: number, radius: number): { spans: Span[]; always: number[] } {
-  const from = places[at];
-  const spans: Span[] = [];
-  const always: number[] = [at];
-  if (!from) return { spans, always };
-  places.forEach((place, position) => {
-    if (position === at) return;
-    const dx = place.x - from.x;
-    const dy = place.y - from.y;
-    if (Math.abs(dx) > 2 * radius || Math.abs(dy) > 2 * radius) return;
-    const distance = Math.sqrt(dx * dx + dy * dy);
-    if (distance === 0) always.push(position);
-    else if (distance <= 2 * radius)
-      spans.push(...arcSpans({ x: dx / distance, y: dy / distance }, distance / (2 * radius), position, place.weight));
-  });
-  return { spans, always };
-}
-
-/** Centres seen from a place on the circle's border, from which the circle also holds another place: one arc, cut at turn 0. */
-function arcSpans(towards: Vector, cos: number, position: number, weight: number): Span[] {
-  const sin = Math.sqrt(Math.max(0, (1 - cos) * (1 + cos)));
-  const start = turnOf(towards.x * cos + towards.y * sin, towards.y * cos - towards.x * sin);
-  const end = turnOf(towards.x * cos - towards.y * sin, towards.y * cos + towards.x * sin);
-  if (start <= end) return [{ start, end, position, weight }];
-  return [
-    { start, end: 4, position, weight },
-    { start: 0, end, position, weight },
-  ];
-}
-
-function heaviestCircle(places: readonly Weight[], diameter: number, allowed: number): WindowFinding {
-  const breaking = new Set<number>();
-  let most = 0;
-  places.forEach((_, at) => {
-    const { spans, always } = circlesThrough(places, at, diameter / 2);
-    const base = always.reduce((sum, position) => sum + (places[position]?.weight ?? 0), 0);
-    const found = sweep(spans, base, allowed);
-    most = Math.max(most, found.most);
-    if (found.most > allowed) for (const position of [...always, ...found.breaking]) breaking.add(position);
-  });
-  return { most, breaking };
-}
-
+/** Any square may be shifted until its left and bottom sides each hold a place. */
 function heaviestSquare(places: readonly Weight[], side: number, allowed: number): WindowFinding {
   const breaking = new Set<number>();
+  const { xs, ys, weights, positions } = sortedByY(places);
+  const column = new Int32Array(xs.length);
   let most = 0;
-  for (const left of places) {
-    const spans: Span[] = [];
-    places.forEach((place, position) => {
-      const dx = place.x - left.x;
-      // The bottoms of squares of this left side that hold the place.
-      if (dx >= 0 && dx <= side) spans.push({ start: place.y - side, end: place.y, position, weight: place.weight });
-    });
-    const found = sweep(spans, 0, allowed);
-    most = Math.max(most, found.most);
-    for (const position of found.breaking) breaking.add(position);
+  for (const left of xs) {
+    let count = 0;
+    for (let at = 0; at < xs.length; at++) {
+      const x = (xs[at] ?? 0) - left;
+      if (x >= 0 && x <= side) column[count++] = at;
+    }
+    let weight = 0;
+    let above = 0;
+    let marked = 0;
+    for (let index = 0; index < count; index++) {
+      const bottom = column[index] ?? 0;
+      const bottomY = ys[bottom] ?? 0;
+      for (; above < count && (ys[column[above] ?? 0] ?? 0) - bottomY <= side; above++)
+        weight += weights[column[above] ?? 0] ?? 0;
+      if (weight > most) most = weight;
+      if (weight > allowed) {
+        for (marked = Math.max(marked, index); marked < above; marked++) breaking.add(positions[column[marked] ?? 0] ?? 0);
+      }
+      weight -= weights[bottom] ?? 0;
+    }
   }
   return { most, breaking };
 }

@@ -110,7 +110,7 @@ export function judgeTotalInWindow(
 }
 
 /** How many alignment steps one row may take; past it, more than 200 indications that hang together are refused by name. */
-const ALIGNMENT_STEPS = 150_000_000;
+const ALIGNMENT_STEPS = 30_000_000;
 const ALWAYS_TAKEN = 200;
 
 function alignable(members: readonly Member[], rule: Rule<'alignment'>, scene: Scene, loose: readonly Member[]): Alignable {
