@@ -10,6 +10,11 @@ type Act = InspectionContent['acts'][number];
 
 const exposureFields = ['kV', 'mA', 'exposureS', 'distanceMm', 'indicatorSeen'] as const;
 
+/** The workstation's clock, as a first entry; the server keeps its own times of entry and signature beside it. */
+function clockHere(): string {
+  return new Date(performance.timeOrigin + performance.now()).toISOString();
+}
+
 export interface ActsPanelProps {
   readonly draft: Draft;
   readonly answer: InspectionAnswer;
@@ -26,7 +31,7 @@ export function ActsPanel({ draft, answer, me, readOnly }: ActsPanelProps) {
     const before = actOf(kind) ?? {
       kind,
       person: me.id,
-      at: new Date(performance.timeOrigin + performance.now()).toISOString(),
+      at: clockHere(),
       equipment: [],
       values: {},
     };

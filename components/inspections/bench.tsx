@@ -72,7 +72,7 @@ function Bench({ answer, me, maySign, renew }: { answer: InspectionAnswer; me: P
   const pictured = rows.hasRules || answer.requirement.evidence.length > 0;
   const source = { uncertainties: answer.uncertainties, gaugeKinds: gaugeKindsOf(draft.content, answer.equipment) };
   return (
-    <div data-density="capture" className="flex h-[calc(100vh-3.5rem)] flex-col">
+    <div data-density="capture" className="flex h-[calc(100vh-5rem)] flex-col">
       <Head answer={answer} />
       <div className={`grid min-h-0 flex-1 gap-4 p-4 ${pictured ? 'lg:grid-cols-[minmax(0,3fr)_minmax(24rem,2fr)]' : ''}`}>
         {pictured ? (

@@ -80,27 +80,13 @@ async function carryOut(work: By, row: FindingRow, body: Body): Promise<readonly
   return keys;
 }
 
-/**
- * A reviewer's signed decision on a finding. The part's row is written first; the decision, what it reopens and the
- * counters change together. Problems: not-found, not-permitted, state-refused, invalid-input.
- */
-export async function dispositionFinding(work: By, number: string, body: Body): Promise<Recorded<Finding>> {
-  const known = await findingByNumber(work, number);
-  if (!known) throw notFound(`Finding ${number}`);
-  await takeRows(work, 'parts', [known.partId]);
-  await takeRows(work, 'findings', [known.id]);
-  const row = await findingByNumber(work, number);
-  if (!row) throw notFound(`Finding ${number}`);
-  const history = await historyOf(work, row.partId, row.requirementId);
-  refuse(work.actor, row, new Set(history.map(({ signedById }) => signedById)), body.decision);
-  const repeat = await carryOut(work, row, body);
-  const sentence = dispositionSentence({
-    name: work.actor.name,
-    finding: number,
-    serial: row.serial,
-    decision: body.decision,
-    repeat,
-  });
+async function storeDecision(
+  work: By,
+  row: FindingRow,
+  body: Body,
+  repeat: readonly string[],
+  sentence: string,
+): Promise<string> {
   const last = await selectOne<{ seq: number | null }>(work, 'SELECT MAX(seq) AS seq FROM dispositions WHERE finding_id = ?', [
     row.id,
   ]);
@@ -108,7 +94,7 @@ export async function dispositionFinding(work: By, number: string, body: Body): 
   const record = {
     schema: 1,
     id,
-    finding: number,
+    finding: row.number,
     part: row.partId,
     serial: row.serial,
     inspection: row.inspectionId,
@@ -141,6 +127,31 @@ export async function dispositionFinding(work: By, number: string, body: Body): 
       sqlTimeOf(work.now),
     ],
   );
+  return digest;
+}
+
+/**
+ * A reviewer's signed decision on a finding. The part's row is written first; the decision, what it reopens and the
+ * counters change together. Problems: not-found, not-permitted, state-refused, invalid-input.
+ */
+export async function dispositionFinding(work: By, number: string, body: Body): Promise<Recorded<Finding>> {
+  const known = await findingByNumber(work, number);
+  if (!known) throw notFound(`Finding ${number}`);
+  await takeRows(work, 'parts', [known.partId]);
+  await takeRows(work, 'findings', [known.id]);
+  const row = await findingByNumber(work, number);
+  if (!row) throw notFound(`Finding ${number}`);
+  const history = await historyOf(work, row.partId, row.requirementId);
+  refuse(work.actor, row, new Set(history.map(({ signedById }) => signedById)), body.decision);
+  const repeat = await carryOut(work, row, body);
+  const sentence = dispositionSentence({
+    name: work.actor.name,
+    finding: number,
+    serial: row.serial,
+    decision: body.decision,
+    repeat,
+  });
+  const digest = await storeDecision(work, row, body, repeat, sentence);
   const state = leadsTo[body.decision];
   await execute(work, 'UPDATE findings SET state = ?, closed_at = ? WHERE id = ?', [
     state,

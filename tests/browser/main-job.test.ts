@@ -51,10 +51,8 @@ async function equip(page: Page, actName: string, number: string): Promise<void>
   await select.selectOption(value ?? '');
 }
 
-async function block(page: Page): Promise<void> {
-  for (const when of ['before', 'after']) {
-    for (const nominal of ['1.00', '2.00', '3.00']) await page.getByLabel(`Step ${nominal}, Step block ${when}`).fill(nominal);
-  }
+async function block(page: Page, when: 'before' | 'after'): Promise<void> {
+  for (const nominal of ['1.00', '2.00', '3.00']) await page.getByLabel(`Step ${nominal}, Step block ${when}`).fill(nominal);
 }
 
 async function sign(page: Page): Promise<void> {
@@ -92,9 +90,10 @@ async function measureWalls(page: Page): Promise<void> {
     .first()
     .waitFor();
   await page.getByLabel('Reading 22').fill('0,905');
+  await block(page, 'before');
   await act(page, 'Measured');
   await equip(page, 'Measured', 'UT-07');
-  await block(page);
+  await block(page, 'after');
   await page.getByLabel('Every view this operation asks for was examined.').check();
   await page.locator('[data-saved="saved"]').waitFor();
   await page.reload();
