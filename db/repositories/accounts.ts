@@ -1,7 +1,7 @@
 import type { Actor } from '../../services/contracts/actor';
 import type { Role } from '../../services/contracts/common';
 import { table } from '../models/table';
-import { isoOf, select, selectOne, type Reading } from '../work';
+import { isoOf, selectOne, type Reading } from '../work';
 
 export interface AccountRow {
   id: string;
@@ -60,12 +60,6 @@ export async function accountByEmail(reading: Reading, email: string): Promise<A
 export async function accountById(reading: Reading, accountId: string): Promise<Account | undefined> {
   const row = await selectOne<Stored>(reading, `SELECT ${columns} ${from} WHERE a.id = ?`, [accountId]);
   return row && toAccount(row);
-}
-
-/** All accounts by name, at most 500. */
-export async function listAccounts(reading: Reading): Promise<Account[]> {
-  const rows = await select<Stored>(reading, `SELECT ${columns} ${from} ORDER BY a.name, a.id LIMIT 500`);
-  return rows.map(toAccount);
 }
 
 /** What the rest of the product knows of a signed-in person. */

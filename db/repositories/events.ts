@@ -98,13 +98,3 @@ export async function eventsOf(reading: Reading, subject: Subject, limit = 500, 
   );
   return rows.map(toEvent);
 }
-
-/** Newest events of the whole journal before a position (0 = from the newest). */
-export async function newestEvents(reading: Reading, limit: number, beforeSeq = 0): Promise<StoredEvent[]> {
-  const rows = await select<EventRow>(
-    reading,
-    `SELECT ${columns} FROM events e LEFT JOIN accounts a ON a.id = e.actor_id WHERE (? = 0 OR e.seq < ?) ORDER BY e.seq DESC LIMIT ?`,
-    [beforeSeq, beforeSeq, limit],
-  );
-  return rows.map(toEvent);
-}

@@ -7,7 +7,7 @@ import { dicondeFile } from './pictures/diconde-file';
 import type { KnownFlaw } from './pictures/known-flaws';
 import type { DemoPartNumber } from './pictures/part-forms';
 import { penetrantPhotograph } from './pictures/penetrant';
-import { greyTiff, photographJpeg } from './pictures/picture-files';
+import { photographJpeg } from './pictures/picture-files';
 import { radiograph } from './pictures/radiograph';
 
 async function admit(actor: Actor, kind: 'radiograph' | 'photograph', name: string, bytes: Buffer): Promise<string> {
@@ -106,11 +106,4 @@ export async function seedPictures(people: Cast): Promise<Pictures> {
       { type: 'gas-pore', shape: { kind: 'circle', center: [30000, 26000], diameter: 420 }, brightness: 0.7 },
     ]),
   };
-}
-
-/** A TIFF of the fresh part, for trying an upload by hand. */
-export async function samplePicture(): Promise<Buffer> {
-  return greyTiff(
-    radiograph({ partNumber: 'AM-2210', view: 'concave', serial: 'T10413', seed: 61, pixelPitchUm: pitchUm, flaws: [] }),
-  );
 }

@@ -3,11 +3,6 @@ import { z } from 'zod';
 /** UUIDv7 made by the server. */
 export const id = z.uuid();
 
-/** An entered decimal: kept as text with its digits, never a JSON number (rule N1). */
-export const decimal = z
-  .string()
-  .regex(/^-?[0-9]{1,16}(\.[0-9]{1,16})?$/, 'must be a decimal such as 0.75 (digits, one point, no exponent, no grouping)');
-
 /** Instant in UTC with microseconds, `2026-03-09T14:05:06.123456Z`. */
 export const instant = z.string();
 
@@ -88,9 +83,6 @@ export const pageQuery = z.object({
 export function page<Item extends z.ZodType>(item: Item) {
   return z.object({ items: z.array(item), next: z.string().nullable() });
 }
-
-/** A person as shown beside what they did. */
-export const person = z.object({ id, name: z.string() });
 
 /** Password and, where the call allows it, PIN at the moment of signing. */
 export const password = z.string().min(1, 'is needed to sign').max(200);

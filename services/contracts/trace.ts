@@ -3,7 +3,7 @@ import { id, instant } from './common';
 import { operation } from './operation';
 import { part } from './parts';
 
-export const tracedEvent = z.object({
+const tracedEvent = z.object({
   id,
   seq: z.int(),
   at: instant,
@@ -13,9 +13,8 @@ export const tracedEvent = z.object({
   details: z.record(z.string(), z.unknown()),
   digest: z.string(),
 });
-export type TracedEvent = z.output<typeof tracedEvent>;
 
-export const tracedInspection = z.object({
+const tracedInspection = z.object({
   id,
   number: z.string(),
   operation: z.string(),
@@ -32,7 +31,7 @@ export const tracedInspection = z.object({
 });
 
 /** The whole history of a part. */
-export const trace = z.object({
+const trace = z.object({
   part,
   inspections: z.array(tracedInspection),
   events: z.array(tracedEvent),

@@ -14,11 +14,10 @@ function flatten(tree: object, prefix = ''): Entry[] {
 
 /** The parameters of an ICU message: `{count, plural, …}` and `{name}`. */
 function parameters(text: string): string[] {
-  return [...new Set([...text.matchAll(/\{\s*([a-zA-Z][a-zA-Z0-9]*)\s*[,}]/g)].map((match) => match[1] ?? ''))]
-    .filter((name) =>
-      new RegExp(`\\{\\s*${name}\\s*[,}]`).test(text.replace(/(?:zero|one|two|few|many|other|=\d+|[a-z-]+)\s*\{[^{}]*\}/g, '')),
-    )
-    .sort();
+  // Inside a plural or a choice the branches stand in braces too; elsewhere every brace is a parameter.
+  const branches = /,\s*(?:plural|select|selectordinal)\s*,/.test(text);
+  const plain = branches ? text.replace(/(?:zero|one|two|few|many|other|=\d+|[a-z-]+)\s*\{[^{}]*\}/g, '') : text;
+  return [...new Set([...plain.matchAll(/\{\s*([a-zA-Z][a-zA-Z0-9]*)\s*[,}]/g)].map((match) => match[1] ?? ''))].sort();
 }
 
 const english = flatten(catalogue.en);

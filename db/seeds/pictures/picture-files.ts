@@ -42,8 +42,3 @@ function colourInput(picture: ColourPicture): Sharp {
 export function photographJpeg(picture: ColourPicture): Promise<Buffer> {
   return colourInput(picture).jpeg({ quality: 92, chromaSubsampling: '4:4:4' }).toBuffer();
 }
-
-/** PNG photograph, values unchanged. */
-export function photographPng(picture: ColourPicture): Promise<Buffer> {
-  return colourInput(picture).png({ compressionLevel: 6 }).toBuffer();
-}

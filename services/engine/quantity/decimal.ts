@@ -59,10 +59,6 @@ export function compare(a: Rational, b: Rational): -1 | 0 | 1 {
   return left < right ? -1 : left > right ? 1 : 0;
 }
 
-export function isZero(a: Rational): boolean {
-  return a.n === 0n;
-}
-
 /** The whole number nearest to a ÷ b (b > 0), a tie to the even one. */
 function nearestEven(a: bigint, b: bigint): bigint {
   const down = a / b - (a % b < 0n ? 1n : 0n);
