@@ -264,9 +264,13 @@ describe('the main job, from sign-in to the trace', () => {
     expect(record.serials).toMatchObject([{ serial, heat: 'H-26-118' }]);
     execFileSync('pdftoppm', ['-png', '-r', '200', pdf, path.join(files.folder, 'page')]);
     // zbarimg ends with 4 when one of the pages has no code on it.
-    const pages = execFileSync('sh', ['-c', `zbarimg -q --raw ${path.join(files.folder, 'page')}*.png 2>/dev/null || test $? -eq 4`], {
-      encoding: 'utf8',
-    });
+    const pages = execFileSync(
+      'sh',
+      ['-c', `zbarimg -q --raw ${path.join(files.folder, 'page')}*.png 2>/dev/null || test $? -eq 4`],
+      {
+        encoding: 'utf8',
+      },
+    );
     expect(pages.trim().split('\n')).toContain(record.verifyUrl);
 
     const stranger = await openDesk(browser);
