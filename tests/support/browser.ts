@@ -1,9 +1,7 @@
 import { mkdirSync, mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
-import axe from 'axe-core';
 import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core';
-import { expect } from 'vitest';
 import { testAddress } from './stack';
 
 export const demoPassword = 'sound-castings-ring-true';
@@ -72,31 +70,6 @@ export async function signIn(desk: Desk, email: string, password = demoPassword)
   await desk.page.waitForURL((url) => !url.pathname.startsWith('/sign-in'));
 }
 
-/** What axe finds against WCAG 2.2 A and AA on the page as it stands. */
-export async function axeFindings(page: Page): Promise<string[]> {
-  await page.evaluate(axe.source);
-  const found = await page.evaluate(async () => {
-    const run = (
-      window as unknown as {
-        axe: {
-          run: (
-            options: object,
-          ) => Promise<{ violations: { id: string; nodes: { target: unknown[]; failureSummary?: string }[] }[] }>;
-        };
-      }
-    ).axe.run;
-    const { violations } = await run({ runOnly: ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'] });
-    return violations.flatMap(({ id, nodes }) =>
-      nodes
-        .slice(0, 3)
-        .map(
-          ({ target, failureSummary }) => `${id} at ${JSON.stringify(target)}: ${(failureSummary ?? '').replaceAll('\n', ' ')}`,
-        ),
-    );
-  });
-  return found;
-}
-
 /** Keeps a picture of the page where a person can look at it when RINGTRUE_PICTURES names a folder. */
 export async function picture(page: Page, name: string): Promise<void> {
   const folder = process.env.RINGTRUE_PICTURES;
@@ -109,8 +82,4 @@ export async function picture(page: Page, name: string): Promise<void> {
 export function scratch(): { readonly folder: string; readonly remove: () => void } {
   const folder = mkdtempSync(path.join(tmpdir(), 'ringtrue-test-'));
   return { folder, remove: () => rmSync(folder, { recursive: true, force: true }) };
-}
-
-export function expectNoFaults(desk: Desk): void {
-  expect(desk.faults).toEqual([]);
 }
