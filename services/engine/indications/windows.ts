@@ -23,12 +23,14 @@ class Arcs {
   private readonly heavyBefore: Int32Array;
   private readonly numbers: number;
   private readonly scale: number;
+  private readonly weights: Float64Array;
   private count = 0;
 
   constructor(
-    private readonly places: readonly Weight[],
-    private readonly breaking: Set<number>,
+    places: readonly Weight[],
+    private readonly breaking: Uint8Array,
   ) {
+    this.weights = Float64Array.from(places, (place) => place.weight);
     // An arc over turn 0 is cut in two.
     const arcs = 2 * places.length;
     this.keys = new Float64Array(2 * arcs);
@@ -75,7 +77,7 @@ class Arcs {
       const event = key - Math.floor(key / numbers) * numbers;
       const arc = event < numbers / 2 ? event : event - numbers / 2;
       const owner = this.owners[arc] ?? 0;
-      const own = this.places[owner]?.weight ?? 0;
+      const own = this.weights[owner] ?? 0;
       if (event < numbers / 2) {
         this.heavyBefore[arc] = heavy;
         weight += own;
@@ -83,7 +85,7 @@ class Arcs {
         if (weight > allowed) heavy++;
       } else {
         // Some opening since this one, or this one itself, was heavy.
-        if (heavy > (this.heavyBefore[arc] ?? 0)) this.breaking.add(owner);
+        if (heavy > (this.heavyBefore[arc] ?? 0)) this.breaking[owner] = 1;
         weight -= own;
       }
     }
@@ -106,9 +108,13 @@ function sortedByY(places: readonly Weight[]): Sorted {
   return { xs: of('x'), ys: of('y'), weights: of('weight'), positions };
 }
 
+function numbersOf(marked: Uint8Array): ReadonlySet<number> {
+  return new Set([...marked.keys()].filter((number) => marked[number] === 1));
+}
+
 /** Any circle may be shifted until a place it holds lies on its border, so circles through each place in turn are enough. */
 function heaviestCircle(places: readonly Weight[], diameter: number, allowed: number): WindowFinding {
-  const breaking = new Set<number>();
+  const breaking = new Uint8Array(places.length);
   const { xs, ys, weights, positions } = sortedByY(places);
   const arcs = new Arcs(places, breaking);
   let most = 0;
@@ -135,14 +141,14 @@ function heaviestCircle(places: readonly Weight[], diameter: number, allowed: nu
     }
     const found = arcs.heaviest(base, allowed);
     most = Math.max(most, found);
-    if (found > allowed) for (const position of here) breaking.add(position);
+    if (found > allowed) for (const position of here) breaking[position] = 1;
   }
-  return { most, breaking };
+  return { most, breaking: numbersOf(breaking) };
 }
 
 /** Any square may be shifted until its left and bottom sides each hold a place. */
 function heaviestSquare(places: readonly Weight[], side: number, allowed: number): WindowFinding {
-  const breaking = new Set<number>();
+  const breaking = new Uint8Array(places.length);
   const { xs, ys, weights, positions } = sortedByY(places);
   const column = new Int32Array(xs.length);
   let most = 0;
@@ -162,12 +168,12 @@ function heaviestSquare(places: readonly Weight[], side: number, allowed: number
         weight += weights[column[above] ?? 0] ?? 0;
       if (weight > most) most = weight;
       if (weight > allowed) {
-        for (marked = Math.max(marked, index); marked < above; marked++) breaking.add(positions[column[marked] ?? 0] ?? 0);
+        for (marked = Math.max(marked, index); marked < above; marked++) breaking[positions[column[marked] ?? 0] ?? 0] = 1;
       }
       weight -= weights[bottom] ?? 0;
     }
   }
-  return { most, breaking };
+  return { most, breaking: numbersOf(breaking) };
 }
 
 /**

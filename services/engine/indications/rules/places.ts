@@ -1,6 +1,7 @@
 import type { IndicationRule } from '../../evaluate/types';
+import type { Alignable, Link } from '../alignable';
 import { hangingTogether, longestAlignment } from '../alignment';
-import type { Alignable, AlignmentFinding, Link } from '../alignment';
+import type { AlignmentFinding } from '../alignment';
 import { centroidStep } from '../mark';
 import { areaLimit, lengthLimit, reachUm } from '../rounding';
 import type { Member, Scene } from '../scene';
