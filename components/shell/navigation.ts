@@ -42,7 +42,9 @@ export const navigation: readonly NavigationItem[] = [
   { href: '/review', label: 'review', group: 'judgement', roles: ['reviewer'] },
   { href: '/shipments', label: 'shipments', group: 'judgement', roles: judges },
   { href: '/certificates', label: 'certificates', group: 'judgement', roles },
+  { href: '/personnel', label: 'personnel', group: 'basis', roles: [...staff, 'auditor'] },
   { href: '/trace', label: 'trace', group: 'history', roles: [...staff, 'auditor'] },
+  { href: '/people', label: 'people', group: 'house', roles: ['administrator'] },
 ];
 
 /** The items of a role, grouped, in order. */

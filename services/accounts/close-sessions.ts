@@ -1,3 +1,4 @@
+import { endSession, endSessionsOf } from '@/db/repositories/sessions';
 import type { Work } from '@/db/work';
 import type { Actor } from '@/services/contracts/actor';
 import type { Recorded } from '@/services/http/route';
@@ -5,8 +6,8 @@ import { lucia } from './sessions';
 
 /** Ends this session, or every session of the account. */
 export async function closeSessions(work: Work & { readonly actor: Actor }, everywhere: boolean): Promise<Recorded<undefined>> {
-  if (everywhere) await lucia.invalidateUserSessions(work.actor.id);
-  else if (work.actor.sessionId) await lucia.invalidateSession(work.actor.sessionId);
+  if (everywhere) await endSessionsOf(work, work.actor.id);
+  else if (work.actor.sessionId) await endSession(work, work.actor.sessionId);
   return {
     answer: undefined,
     headers: { 'set-cookie': lucia.createBlankSessionCookie().serialize() },

@@ -5,7 +5,8 @@ import { Problem } from '@/services/http/problem';
 import { passwordMatches } from './passwords';
 import { rememberAttempt, secondsToWait } from './rate-limit';
 
-const pinTries = 5;
+/** Wrong PINs after which only the password counts. */
+export const pinTries = 5;
 
 /**
  * The person's own password (or, for bench work, PIN) at the moment of signing. Five wrong PINs lock the PIN until
@@ -18,7 +19,7 @@ export async function confirmSignature(
   const account = await accountById(reading(), actor.id);
   if (!account || account.disabledAt !== null) throw new Problem('not-signed-in', 'This account is closed.');
   if (proof.password !== undefined) return confirmPassword(account.id, account.email, account.passwordHash, proof.password);
-  if (proof.pin !== undefined) return confirmPin(account.id, account.pinHash, account.pinFailures, proof.pin);
+  if (proof.pin !== undefined) return confirmPin(account.id, account.pinHash, proof.pin);
   throw new Problem('invalid-input', 'password: is needed to sign', [{ path: 'password', message: 'is needed to sign' }]);
 }
 
@@ -41,24 +42,23 @@ async function confirmPassword(accountId: string, email: string, stored: string,
   ]);
 }
 
-async function confirmPin(accountId: string, stored: string | null, failures: number, pin: string): Promise<void> {
+async function confirmPin(accountId: string, stored: string | null, pin: string): Promise<void> {
   if (stored === null)
     throw new Problem('signature-refused', 'No PIN is set for this account. Sign with the password.', [
       { path: 'pin', message: 'no PIN is set; use the password' },
     ]);
-  if (failures >= pinTries)
+  // The try is counted before it is judged: many at once cannot all be the first.
+  const counted = await inTransaction(null, (work) =>
+    execute(work, 'UPDATE accounts SET pin_failures = pin_failures + 1 WHERE id = ? AND pin_failures < ?', [accountId, pinTries]),
+  );
+  if (counted === 0)
     throw new Problem('signature-refused', 'The PIN is locked after five wrong tries. Sign with the password.', [
       { path: 'pin', message: 'is locked; use the password' },
     ]);
   if (await passwordMatches(stored, pin)) {
-    await inTransaction(null, (work) =>
-      execute(work, 'UPDATE accounts SET pin_failures = 0 WHERE id = ? AND pin_failures > 0', [accountId]),
-    );
+    await inTransaction(null, (work) => execute(work, 'UPDATE accounts SET pin_failures = 0 WHERE id = ?', [accountId]));
     return;
   }
-  await inTransaction(null, (work) =>
-    execute(work, 'UPDATE accounts SET pin_failures = pin_failures + 1 WHERE id = ?', [accountId]),
-  );
   throw new Problem('signature-refused', 'The PIN is wrong. Nothing was signed; what you entered is kept.', [
     { path: 'pin', message: 'is wrong' },
   ]);

@@ -53,6 +53,7 @@ export const permissions = {
     releaseAuthority: true,
     sentence: 'A reviewer with release authority signs, never for a serial they evaluated or dispositioned.',
   },
+  'see-jobs': { roles: readers, sentence: 'Staff and auditors see how far work after a change has come.' },
   'see-certificates': { roles: everyone, sentence: 'Staff and auditors see certificates; a customer sees their own.' },
   'acknowledge-certificate': { roles: ['customer-quality'], sentence: 'The customer acknowledges what arrived.' },
   'withdraw-certificate': {
@@ -76,6 +77,7 @@ export const permissions = {
     roles: ['administrator', 'reviewer'],
     sentence: 'Administrators prepare authorisations and vision records.',
   },
+  'record-vision': { roles: ['administrator'], sentence: 'Administrators record vision tests.' },
   'approve-personnel': { roles: ['reviewer'], sentence: 'Reviewers approve authorisations in their method, never their own.' },
   'keep-accounts': { roles: ['administrator'], sentence: 'Administrators keep accounts and customers.' },
   'keep-orders': { roles: ['administrator', 'reviewer'], sentence: 'Administrators and reviewers keep customers and orders.' },

@@ -1,7 +1,8 @@
-import { Lucia, TimeSpan } from 'lucia';
+import { generateIdFromEntropySize, Lucia, TimeSpan } from 'lucia';
 import { sessionAdapter } from '@/db/session-adapter';
 import { accountById, actorOf } from '@/db/repositories/accounts';
-import { databaseNow, reading } from '@/db/work';
+import { keepSession, sessionClock } from '@/db/repositories/sessions';
+import { inTransaction, reading, type Work } from '@/db/work';
 import type { Actor } from '@/services/contracts/actor';
 
 declare module 'lucia' {
@@ -12,22 +13,29 @@ declare module 'lucia' {
   }
 }
 
+/** One shift and a half. */
+const sessionHours = 12;
+
+export const sessionCookieName = 'ringtrue-session';
+
 const secure = (process.env.RINGTRUE_BASE_URL ?? '').startsWith('https://');
 
-/** Sessions last one shift and a half from the last use; the cookie is not readable by scripts. */
+/** A session and its cookie last twelve hours from the sign-in; the cookie is not readable by scripts. */
 export const lucia = new Lucia(sessionAdapter, {
-  sessionExpiresIn: new TimeSpan(12, 'h'),
-  sessionCookie: { name: 'ringtrue-session', expires: true, attributes: { secure, sameSite: 'lax', path: '/' } },
+  sessionExpiresIn: new TimeSpan(sessionHours, 'h'),
+  sessionCookie: { name: sessionCookieName, expires: true, attributes: { secure, sameSite: 'lax', path: '/' } },
 });
 
-/** Opens a session; answers the Set-Cookie value. `at` is database time. */
-export async function openSession(accountId: string, at: string, address: string, agent: string): Promise<string> {
-  const session = await lucia.createSession(accountId, {
-    created_at: at.replace('T', ' ').replace(/Z$/, ''),
-    address: address.slice(0, 64),
-    agent: agent.slice(0, 200),
-  });
-  return lucia.createSessionCookie(session.id).serialize();
+/**
+ * Opens a session under a new id and answers the Set-Cookie value. `at` is database time. `within` is the transaction
+ * that decides about it; without one the session stands alone.
+ */
+export async function openSession(accountId: string, at: string, address: string, agent: string, within?: Work): Promise<string> {
+  // 200 random bits.
+  const sessionId = generateIdFromEntropySize(25);
+  const keep = (work: Work) => keepSession({ ...work, now: at }, { sessionId, accountId, hours: sessionHours, address, agent });
+  await (within ? keep(within) : inTransaction(null, keep));
+  return lucia.createSessionCookie(sessionId).serialize();
 }
 
 /**
@@ -40,7 +48,8 @@ export async function actorBySession(sessionId: string | null): Promise<Actor | 
   if (!session) return null;
   const account = await accountById(reading(), session.userId);
   if (!account || account.disabledAt !== null) return null;
-  if (account.accessUntil !== null && account.accessUntil <= (await databaseNow())) return null;
+  const { now, young } = await sessionClock(reading(), sessionId, sessionHours);
+  if (!young || (account.accessUntil !== null && account.accessUntil <= now)) return null;
   return actorOf(account, sessionId);
 }
 

@@ -1,4 +1,5 @@
 import { accountByEmail, type Account } from '@/db/repositories/accounts';
+import { endSession } from '@/db/repositories/sessions';
 import { inTransaction, reading, type Work } from '@/db/work';
 import { Problem } from '@/services/http/problem';
 import { passwordMatches } from './passwords';
@@ -40,12 +41,16 @@ export async function checkSignIn(attempt: Attempt): Promise<Account> {
   return account;
 }
 
-/** Opens the session of a checked account and keeps the sign-in; answers the Set-Cookie value. */
+/**
+ * Opens the session of a checked account under a new id, ends the one the browser came with (nobody may have put it
+ * there), and keeps the sign-in; answers the Set-Cookie value.
+ */
 export async function enter(
   work: Work,
   account: Account,
-  place: { readonly address: string; readonly agent: string },
+  place: { readonly address: string; readonly agent: string; readonly earlier: string | null },
 ): Promise<string> {
+  if (place.earlier !== null) await endSession(work, place.earlier);
   await rememberAttempt(work, { email: account.email, accountId: account.id, address: place.address, outcome: 'signed-in' });
-  return openSession(account.id, work.now, place.address, place.agent);
+  return openSession(account.id, work.now, place.address, place.agent, work);
 }

@@ -4,6 +4,7 @@ export const eventKinds = [
   'signed-out',
   'signed-out-everywhere',
   'password-changed',
+  'pin-set',
   'account-created',
   'account-changed',
   'authorisation-prepared',

@@ -4,7 +4,10 @@ import { Problem } from './problem';
 export function refuseForeignOrigin(request: Request): void {
   const origin = request.headers.get('origin');
   if (origin === null) return;
-  const own = new Set([request.headers.get('host') ?? '', new URL(process.env.RINGTRUE_BASE_URL ?? request.url).host]);
+  // `Origin: null` has no host and is nobody's own, also where a Host header is missing.
   const host = URL.canParse(origin) ? new URL(origin).host : '';
-  if (!own.has(host)) throw new Problem('foreign-origin', `A request from ${origin.slice(0, 80)} may not change anything here.`);
+  const own = [request.headers.get('host'), new URL(process.env.RINGTRUE_BASE_URL ?? request.url).host];
+  if (host === '' || !own.includes(host)) {
+    throw new Problem('foreign-origin', `A request from ${origin.slice(0, 80)} may not change anything here.`);
+  }
 }

@@ -9,10 +9,11 @@ describe('the pages that a role is shown', () => {
   });
 
   it('shows an auditor what can be followed, and nothing that releases or judges', () => {
-    expect(paths('auditor')).toEqual(['/', '/parts', '/certificates', '/trace']);
+    expect(paths('auditor')).toEqual(['/', '/parts', '/certificates', '/personnel', '/trace']);
   });
 
-  it('keeps judgement with reviewers', () => {
+  it('keeps judgement with reviewers and people with the administrator', () => {
+    expect(roles.filter((role) => paths(role).includes('/people'))).toEqual(['administrator']);
     expect(paths('reviewer')).toContain('/review');
     expect(roles.filter((role) => role !== 'reviewer').some((role) => paths(role).includes('/review'))).toBe(false);
   });

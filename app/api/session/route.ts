@@ -1,4 +1,5 @@
 import { closeSessions } from '@/services/accounts/close-sessions';
+import { sessionIdOf } from '@/services/accounts/sessions';
 import { checkSignIn, enter } from '@/services/accounts/sign-in';
 import { readSession, signIn, signOut } from '@/services/contracts/session';
 import { callerAddress } from '@/services/http/caller-address';
@@ -15,6 +16,7 @@ export const POST = route({
       'set-cookie': await enter(work, account, {
         address: callerAddress(request),
         agent: request.headers.get('user-agent') ?? '',
+        earlier: sessionIdOf(request),
       }),
     },
     events: [{ subject: { kind: 'account', id: account.id }, details: {} }],
