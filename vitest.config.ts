@@ -6,7 +6,10 @@ export default defineConfig({
   test: {
     projects: [
       { extends: true, test: { name: 'engine', include: ['tests/engine/**/*.test.ts'] } },
-      { extends: true, test: { name: 'house', include: ['tests/house/**/*.test.ts'], testTimeout: 120_000 } },
+      {
+        extends: true,
+        test: { name: 'house', include: ['tests/house/**/*.test.ts'], testTimeout: 120_000, hookTimeout: 120_000 },
+      },
       {
         extends: true,
         test: {

@@ -10,6 +10,8 @@ import { judgeDraft, type Judgement } from '@/services/contracts/live-judgement'
 import { evaluate } from '@/services/engine/evaluate/evaluate';
 
 const pauseMs = 500;
+// A save that failed is tried again by itself: a network that was gone for a moment must not leave a draft behind.
+const againMs = 2000;
 
 export type SavedState =
   { readonly kind: 'saved' } | { readonly kind: 'saving' } | { readonly kind: 'unsaved'; readonly problem: Problem };
@@ -60,6 +62,7 @@ export function useDraft(answer: InspectionAnswer): Draft {
   const dirty = useRef(false);
   const sending = useRef<Promise<boolean> | null>(null);
   const timer = useRef<ReturnType<typeof setTimeout> | undefined>(undefined);
+  const again = useRef<(() => Promise<boolean>) | null>(null);
 
   const send = useCallback(async (): Promise<boolean> => {
     if (sending.current) await sending.current;
@@ -85,6 +88,9 @@ export function useDraft(answer: InspectionAnswer): Draft {
         setSaved({ kind: 'unsaved', problem: problemOf(failure) });
         if (failure instanceof ProblemError && failure.problem.status === 412) {
           setTheirs(await sendJson<InspectionAnswer>(`/api/inspections/${answer.id}`, { method: 'GET' }));
+        } else {
+          clearTimeout(timer.current);
+          timer.current = setTimeout(() => void again.current?.(), againMs);
         }
         return false;
       });
@@ -92,6 +98,11 @@ export function useDraft(answer: InspectionAnswer): Draft {
     sending.current = null;
     return good;
   }, [answer.id, key]);
+
+  useEffect(() => {
+    again.current = send;
+    return () => clearTimeout(timer.current);
+  }, [send]);
 
   const schedule = useCallback(() => {
     clearTimeout(timer.current);
@@ -115,9 +126,9 @@ export function useDraft(answer: InspectionAnswer): Draft {
   useEffect(() => {
     const left = kept(key);
     if (left && answer.state === 'draft' && left.version === answer.version) change(left.content);
-    const again = () => dirty.current && void send();
-    window.addEventListener('online', again);
-    return () => window.removeEventListener('online', again);
+    const online = () => dirty.current && void send();
+    window.addEventListener('online', online);
+    return () => window.removeEventListener('online', online);
   }, [key, answer.state, answer.version, change, send]);
 
   const judgement = useMemo(() => judge(answer, content), [answer, content]);

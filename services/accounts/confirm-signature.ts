@@ -1,5 +1,5 @@
 import { accountById } from '@/db/repositories/accounts';
-import { execute, inTransaction, reading } from '@/db/work';
+import { execute, inTransaction, reading, selectOne } from '@/db/work';
 import type { Actor } from '@/services/contracts/actor';
 import { Problem } from '@/services/http/problem';
 import { passwordMatches } from './passwords';
@@ -47,18 +47,23 @@ async function confirmPin(accountId: string, stored: string | null, pin: string)
     throw new Problem('signature-refused', 'No PIN is set for this account. Sign with the password.', [
       { path: 'pin', message: 'no PIN is set; use the password' },
     ]);
-  // The try is counted before it is judged: many at once cannot all be the first.
-  const counted = await inTransaction(null, (work) =>
-    execute(work, 'UPDATE accounts SET pin_failures = pin_failures + 1 WHERE id = ? AND pin_failures < ?', [accountId, pinTries]),
-  );
-  if (counted === 0)
+  // Judged under the account's row: many guesses at once are judged one after another, and right PINs lock nobody out.
+  const outcome = await inTransaction(null, async (work) => {
+    const row = await selectOne<{ failures: number }>(
+      work,
+      'SELECT pin_failures AS failures FROM accounts WHERE id = ? FOR UPDATE',
+      [accountId],
+    );
+    if ((row?.failures ?? pinTries) >= pinTries) return 'locked';
+    const right = await passwordMatches(stored, pin);
+    await execute(work, 'UPDATE accounts SET pin_failures = ? WHERE id = ?', [right ? 0 : (row?.failures ?? 0) + 1, accountId]);
+    return right ? 'right' : 'wrong';
+  });
+  if (outcome === 'right') return;
+  if (outcome === 'locked')
     throw new Problem('signature-refused', 'The PIN is locked after five wrong tries. Sign with the password.', [
       { path: 'pin', message: 'is locked; use the password' },
     ]);
-  if (await passwordMatches(stored, pin)) {
-    await inTransaction(null, (work) => execute(work, 'UPDATE accounts SET pin_failures = 0 WHERE id = ?', [accountId]));
-    return;
-  }
   throw new Problem('signature-refused', 'The PIN is wrong. Nothing was signed; what you entered is kept.', [
     { path: 'pin', message: 'is wrong' },
   ]);

@@ -55,7 +55,8 @@ async function block(page: Page, when: 'before' | 'after'): Promise<void> {
 }
 
 async function sign(page: Page): Promise<void> {
-  await page.locator('[data-saved="saved"]').waitFor();
+  // The words are compared, so that a failed save says why.
+  await expect.poll(() => page.locator('[data-saved]').textContent(), { timeout: 30_000 }).toBe('Saved');
   await page.getByRole('button', { name: 'Sign', exact: true }).click();
   await page.getByLabel('Password or PIN').fill(demoPassword);
   await page.getByRole('button', { name: 'Sign now' }).click();
@@ -128,7 +129,12 @@ async function penetrant(page: Page, photograph: string): Promise<void> {
   await page.getByLabel('Width, mm').fill('0.30');
   await page.getByRole('button', { name: 'Add indication' }).click();
   await page.getByText('0.38 × 0.3 mm').waitFor();
+  // The network is gone while an entry is made, and comes back by itself: nothing is lost.
+  await page.route('**/api/inspections/*', (call) => call.abort());
   await act(page, 'Processed');
+  await page.locator('[data-saved="unsaved"]').waitFor();
+  await page.unroute('**/api/inspections/*');
+  await page.locator('[data-saved="saved"]').waitFor();
   await act(page, 'Evaluated');
   await equip(page, 'Evaluated', 'UV-11');
   await page.getByLabel('Every view this operation asks for was examined.').check();
