@@ -1,130 +1,124 @@
 'use client';
 
 import { useState } from 'react';
-import { sendJson } from '@/components/forms/send-json';
+import { AttachedFiles } from '@/components/evidence/attached-files';
+import { AttachField } from '@/components/evidence/attach-field';
+import { PartOutline } from '@/components/evidence/part-outline';
+import { UploadList } from '@/components/evidence/upload-list';
 import { useMessages } from '@/components/theme/use-messages';
-import { useWorkstation } from '@/components/theme/workstation';
-import { Button } from '@/components/ui/button';
 import { ProblemNotice } from '@/components/ui/notice';
-import { problemOf, ProblemError, type Problem } from '@/components/ui/problem';
-import type { Mark, MarkShape } from '@/components/viewer/marks';
-import { Viewer } from '@/components/viewer/viewer';
+import type { EvidenceRole } from '@/services/contracts/evidence';
 import type { InspectionAnswer } from '@/services/contracts/inspections';
-import { verdictOf } from './indications-panel';
-import type { ZoneRow } from './plan-rows';
+import { ChoiceField } from './choice-field';
+import { MarkedPicture } from './marked-picture';
+import type { Asked } from './plan-rows';
 import type { Draft } from './use-draft';
-
-/** Sends a file with progress in percent; the server's refusal is thrown as a ProblemError. */
-function upload(url: string, file: File, onProgress: (percent: number) => void): Promise<{ id: string }> {
-  return new Promise((done, refuse) => {
-    const request = new XMLHttpRequest();
-    request.open('POST', url);
-    request.upload.onprogress = ({ loaded, total }) => onProgress(Math.round((100 * loaded) / Math.max(1, total)));
-    request.onerror = () => refuse(new TypeError('no answer'));
-    request.onload = () => {
-      const answer = JSON.parse(request.responseText === '' ? '{}' : request.responseText) as { id: string };
-      if (request.status < 300) done(answer);
-      else refuse(new ProblemError(answer as unknown as Problem));
-    };
-    request.send(file);
-  });
-}
+import type { Evidence } from './use-evidence';
 
 export interface EvidencePanelProps {
   readonly draft: Draft;
   readonly answer: InspectionAnswer;
-  readonly zones: readonly ZoneRow[];
+  readonly evidence: Evidence;
+  readonly rows: Asked;
+  /** What a new mark is taken for. */
+  readonly nextType: string;
+  readonly selectedId: string | null;
+  readonly onSelect: (id: string | null) => void;
   readonly readOnly: boolean;
-  readonly onAttached: () => void;
 }
 
-function marksOf(draft: Draft, evidence: string): Mark[] {
-  return draft.content.indications
-    .filter((one) => one.evidence === evidence)
-    .map((one) => ({ id: one.id, shape: one.shape as MarkShape | null, scale: 'calibrated' }));
+function usualRole({ requirement }: InspectionAnswer): EvidenceRole {
+  if (requirement.evidence[0]) return requirement.evidence[0].role;
+  if (requirement.method === 'radiography') return 'radiograph';
+  return requirement.characteristics.length > 0 ? 'reading-file' : 'photograph';
 }
 
-/** The picture with its marks, and what is attached. */
-export function EvidencePanel({ draft, answer, zones, readOnly, onAttached }: EvidencePanelProps) {
-  const t = useMessages('inspections');
-  const { palette } = useWorkstation();
-  const [chosen, setChosen] = useState<string>();
-  const [sending, setSending] = useState<{ name: string; percent: number }>();
-  const [problem, setProblem] = useState<Problem>();
-  const [pitch, setPitch] = useState<number | null>(null);
-  const role =
-    answer.requirement.evidence[0]?.role ?? (answer.requirement.method === 'radiography' ? 'radiograph' : 'photograph');
-  const view = answer.requirement.views[0] ?? answer.views[0]?.name ?? '';
-  const shown = answer.evidence.find(({ id }) => id === chosen) ?? answer.evidence[0];
-  const attach = async (file: File) => {
-    setProblem(undefined);
-    try {
-      const { id } = await upload(`/api/evidence?kind=${role}&name=${encodeURIComponent(file.name)}`, file, (percent) =>
-        setSending({ name: file.name, percent }),
-      );
-      await sendJson(`/api/inspections/${answer.id}/evidence/${id}`, { method: 'PUT', body: { role, view } });
-      setChosen(id);
-      onAttached();
-    } catch (failure) {
-      setProblem(problemOf(failure));
-    }
-    setSending(undefined);
-  };
-  const onMarks = (marks: readonly Mark[]) => {
-    if (!shown) return;
-    const others = draft.content.indications.filter((one) => one.evidence !== shown.id);
-    const own = marks.map((mark) => {
-      const before = draft.content.indications.find(({ id }) => id === mark.id);
-      return { type: 'gas-pore', view: shown.view ?? view, ...before, id: mark.id, shape: mark.shape, evidence: shown.id };
-    });
-    draft.change({ indications: [...others, ...own] });
-  };
-  const verdicts = Object.fromEntries(
-    draft.content.indications.flatMap(({ id }) => (verdictOf(draft, id) ? [[id, verdictOf(draft, id) ?? 'accept']] : [])),
-  );
-  const grey = shown?.mediaType === 'application/dicom' || (shown?.bits ?? 8) > 8;
-  const known = shown?.pixelPitchUm ? Number(shown.pixelPitchUm) : null;
+/** The part's own view where there is no picture, with what was entered counted in its zones. */
+function NoPicture({ answer, draft, evidence, rows, readOnly }: EvidencePanelProps) {
+  const t = useMessages('evidence');
+  const view = answer.views.find(({ name }) => name === evidence.view) ?? answer.views[0];
+  const counts: Record<string, number> = {};
+  for (const { zones } of draft.judgement.evaluation?.indications ?? []) {
+    for (const zone of zones) counts[zone] = (counts[zone] ?? 0) + 1;
+  }
   return (
-    <section aria-label={t('evidence')} className="flex min-h-0 flex-1 flex-col gap-2">
+    <div className="flex size-full flex-col">
+      {readOnly || !rows.hasRules ? null : <p className="px-3 py-2 text-ink-soft">{t('noPicture')}</p>}
+      {view ? (
+        <div className="min-h-0 flex-1">
+          <PartOutline view={view} zones={rows.zones.filter((zone) => zone.view === view.name)} counts={counts} />
+        </div>
+      ) : null}
+    </div>
+  );
+}
+
+/** Left of the bench: the picture on show with its marks, or the part's view; what is attached and what is on its way. */
+export function EvidencePanel(props: EvidencePanelProps) {
+  const { draft, answer, evidence, rows, nextType, selectedId, onSelect, readOnly } = props;
+  const t = useMessages('evidence');
+  const { shown, uploads } = evidence;
+  const views = answer.views.filter(
+    ({ name }) => answer.requirement.views.length === 0 || answer.requirement.views.includes(name),
+  );
+  const marking = rows.hasRules && !readOnly;
+  const [marked, setMarked] = useState<string>();
+  const onDetach = (file: InspectionAnswer['evidence'][number]) => {
+    const isMarked = draft.content.indications.some((one) => one.evidence === file.id);
+    setMarked(isMarked ? file.name : undefined);
+    if (!isMarked) evidence.detach(file);
+  };
+  return (
+    <section aria-label={t('attached')} className="flex min-h-0 min-w-0 flex-col gap-2">
       <div className="flex flex-wrap items-center gap-2">
-        {answer.evidence.map((one) => (
-          <Button key={one.id} aria-pressed={one.id === shown?.id} onClick={() => setChosen(one.id)}>
-            {t('show', { name: one.name })}
-          </Button>
-        ))}
         {readOnly ? null : (
-          <label className="flex items-center gap-2">
-            <span className="font-semibold">{t('upload')}</span>
-            <input type="file" onChange={(event) => event.target.files?.[0] && void attach(event.target.files[0])} />
-          </label>
+          <AttachField
+            usualRole={usualRole(answer)}
+            // With a picture on show its own view is corrected beside it; the next file shows the next view that lacks one.
+            views={shown ? [] : views}
+            view={evidence.view}
+            onView={evidence.chooseView}
+            onFiles={uploads.add}
+          />
         )}
-        {sending ? <span role="status">{t('uploading', sending)}</span> : null}
+        <AttachedFiles
+          files={answer.evidence}
+          shownId={shown?.id ?? null}
+          readOnly={readOnly}
+          onShow={evidence.show}
+          onDetach={onDetach}
+        />
+        {shown && marking && views.length > 1 ? (
+          <ChoiceField
+            label={t('viewOf', { name: shown.name })}
+            hideLabel
+            value={shown.view ?? ''}
+            options={views.map(({ name, title }) => ({ value: name, text: title }))}
+            onChoose={(view) => evidence.relink(shown, { view })}
+          />
+        ) : null}
       </div>
-      {problem ? <ProblemNotice problem={problem} /> : null}
-      <div className="relative min-h-80 flex-1 border border-line bg-raised">
-        {shown?.width && shown.height ? (
-          <Viewer
-            key={shown.id}
-            source={{
-              kind: grey ? 'packed16' : 'picture',
-              url: grey ? `/api/evidence/${shown.id}/pixels` : `/api/evidence/${shown.id}/preview`,
-              width: shown.width,
-              height: shown.height,
-              pixelPitchUm: known,
-            }}
-            view={shown.view ?? view}
-            zones={zones.filter((zone) => zone.view === (shown.view ?? view))}
-            marks={marksOf(draft, shown.id)}
-            onMarksChange={onMarks}
-            readOnly={readOnly}
-            palette={palette}
-            registration={known === null && pitch !== null ? { pitchUm: pitch } : null}
-            onScaleEntered={setPitch}
-            verdicts={verdicts}
-            takenIds={draft.content.indications.map(({ id }) => id)}
+      <UploadList uploads={uploads} />
+      {marked === undefined ? null : (
+        <p role="alert" className="font-semibold text-reject">
+          {t('detachMarked', { name: marked })}
+        </p>
+      )}
+      {evidence.problem ? <ProblemNotice problem={evidence.problem} /> : null}
+      <div className="relative min-h-60 flex-1 border border-line bg-raised">
+        {shown ? (
+          <MarkedPicture
+            draft={draft}
+            file={shown}
+            zones={rows.zones}
+            nextType={nextType}
+            selectedId={selectedId}
+            onSelect={onSelect}
+            onPitch={(pitchUm) => evidence.relink(shown, { pitchUm })}
+            readOnly={readOnly || !rows.hasRules}
           />
         ) : (
-          <p className="p-4 text-ink-soft">{t('noPicture')}</p>
+          <NoPicture {...props} />
         )}
       </div>
     </section>

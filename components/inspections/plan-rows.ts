@@ -27,18 +27,41 @@ export interface ZoneRow {
   readonly polygon: readonly (readonly [number, number])[];
 }
 
-function rows<Row>(criteria: InspectionAnswer['criteria'], key: string): Row[] {
-  const list = criteria[key];
-  return Array.isArray(list) ? (list as Row[]) : [];
+interface RuleSet {
+  readonly types?: readonly string[];
+  readonly rules?: readonly { readonly types?: readonly string[] }[];
 }
 
-/** What this operation asks, in drawing order. The plan's criteria were judged for faults before it was approved. */
-export function asked(answer: InspectionAnswer) {
+/** What this operation asks, in drawing order. */
+export interface Asked {
+  readonly characteristics: readonly CharacteristicRow[];
+  readonly attributes: readonly NumberedRow[];
+  readonly process: readonly ProcessRow[];
+  readonly zones: readonly ZoneRow[];
+  readonly hasRules: boolean;
+  /** Names of indication types that the plan's rules use, besides the usual ones. */
+  readonly ruledTypes: readonly string[];
+}
+
+// Null stands for absent in criteria; the pages want one form of it.
+function rows<Row>(criteria: InspectionAnswer['criteria'], key: string): Row[] {
+  const list = criteria[key];
+  if (!Array.isArray(list)) return [];
+  return (list as Record<string, unknown>[]).map(
+    (row) => Object.fromEntries(Object.entries(row).filter(([, value]) => value !== null)) as Row,
+  );
+}
+
+/** The plan's criteria were judged for faults before it was approved, so that their rows have these forms. */
+export function asked(answer: InspectionAnswer): Asked {
+  const sets = rows<RuleSet>(answer.criteria, 'indicationRules');
+  const named = sets.flatMap(({ types = [], rules = [] }) => [...types, ...rules.flatMap((rule) => rule.types ?? [])]);
   return {
-    characteristics: rows<CharacteristicRow>(answer.criteria, 'characteristics'),
-    attributes: rows<NumberedRow>(answer.criteria, 'attributes'),
-    process: rows<ProcessRow>(answer.criteria, 'process'),
-    zones: rows<ZoneRow>(answer.criteria, 'zones'),
-    hasRules: rows(answer.criteria, 'indicationRules').length > 0,
+    characteristics: rows(answer.criteria, 'characteristics'),
+    attributes: rows(answer.criteria, 'attributes'),
+    process: rows(answer.criteria, 'process'),
+    zones: rows(answer.criteria, 'zones'),
+    hasRules: sets.length > 0,
+    ruledTypes: [...new Set(named)].filter((type) => type !== '*'),
   };
 }

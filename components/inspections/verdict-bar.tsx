@@ -1,49 +1,97 @@
 'use client';
 
 import { useMessages } from '@/components/theme/use-messages';
-import { Button } from '@/components/ui/button';
-import { Notice } from '@/components/ui/notice';
-import { VerdictMark } from '@/components/ui/verdict-mark';
-import { When } from '@/components/ui/when';
-import type { Draft } from './use-draft';
+import { Glyph } from '@/components/ui/glyph';
+import { VerdictMark, type Verdict } from '@/components/ui/verdict-mark';
+import { noAnswerType } from '@/components/ui/problem';
+import type { Judgement } from '@/services/contracts/live-judgement';
+import type { SavedState } from './draft-keeper';
+import { useMissingWords } from './entry-words';
+import type { MissingEntry } from './missing-entries';
 
-/** The verdict of the whole, what is missing and whether it is saved. */
-export function VerdictBar({ draft, children }: { draft: Draft; children: React.ReactNode }) {
+/** The verdict of what is entered; an entry that cannot be judged leaves nothing accepted. */
+export function verdictSoFar({ evaluation, faults }: Judgement): Verdict | undefined {
+  if (!evaluation) return undefined;
+  const verdict = evaluation.complete ? evaluation.verdict : (evaluation.verdictSoFar ?? undefined);
+  return verdict === 'accept' && faults.length > 0 ? 'indeterminate' : verdict;
+}
+
+function Missing({ missing }: { missing: readonly MissingEntry[] }) {
   const t = useMessages('inspections');
-  const { judgement, saved, theirs } = draft;
-  const missing = judgement.evaluation?.missing ?? [];
-  const soFar = judgement.evaluation?.verdictSoFar;
+  const words = useMissingWords();
+  if (missing.length === 0) return <span>{t('nothingMissing')}</span>;
   return (
-    <footer className="flex flex-wrap items-center gap-x-6 gap-y-2 border-t border-line-strong bg-raised px-4 py-2">
-      <div role="status" aria-live="polite" className="flex flex-wrap items-center gap-4">
-        {soFar ? (
-          <VerdictMark verdict={judgement.evaluation?.complete ? (judgement.evaluation.verdict ?? soFar) : soFar} size="large" />
+    <span className="flex min-w-0 flex-wrap items-center gap-x-2">
+      <strong>{t('missing', { count: missing.length })}</strong>
+      {missing.slice(0, 4).map((entry) => (
+        <button
+          key={`${entry.kind} ${entry.field}`}
+          type="button"
+          className="control text-accent underline underline-offset-4"
+          onClick={() => {
+            const field = document.getElementById(entry.field);
+            field?.scrollIntoView({ block: 'center' });
+            field?.focus();
+          }}
+        >
+          {words(entry)}
+        </button>
+      ))}
+      {missing.length > 4 ? <span className="text-ink-soft">{t('missingMore', { count: missing.length - 4 })}</span> : null}
+    </span>
+  );
+}
+
+function Saved({ saved }: { saved: SavedState }) {
+  const t = useMessages('inspections');
+  if (saved.kind !== 'unsaved') {
+    return (
+      <span data-saved={saved.kind} className="text-ink-soft">
+        {t(saved.kind)}
+      </span>
+    );
+  }
+  const { problem, retrying } = saved;
+  const reason =
+    problem.type === noAnswerType ? t('noNetwork') : problem.status === 412 ? t('conflict') : (problem.detail ?? problem.title);
+  return (
+    <span data-saved="unsaved" role="alert" className="flex max-w-md items-start gap-2 text-sm text-reject">
+      <Glyph name="caution" />
+      <span>
+        {t('unsaved', { reason })} {retrying ? t('retrying') : null}
+      </span>
+    </span>
+  );
+}
+
+export interface VerdictBarProps {
+  readonly judgement: Judgement;
+  readonly missing: readonly MissingEntry[];
+  /** Absent for what can no longer change. */
+  readonly saved?: SavedState;
+  readonly children?: React.ReactNode;
+}
+
+/** Always at the foot of the bench: the verdict of the whole in words, what is missing, whether it is saved, and Sign. */
+export function VerdictBar({ judgement, missing, saved, children }: VerdictBarProps) {
+  const t = useMessages('inspections');
+  const verdict = verdictSoFar(judgement);
+  const complete = judgement.evaluation?.complete ?? false;
+  return (
+    <footer className="flex items-center gap-x-5 gap-y-1 border-t border-line-strong bg-raised px-3 py-1.5">
+      <div role="status" aria-live="polite" className="flex min-w-0 flex-1 flex-wrap items-center gap-x-4 gap-y-1">
+        {verdict ? (
+          <VerdictMark verdict={verdict} size="large" {...(complete ? {} : { reason: t('soFar') })} />
         ) : (
           <span>{t('noVerdict')}</span>
         )}
-        <span>
-          {missing.length === 0
-            ? t('nothingMissing')
-            : `${t('missing', { count: missing.length })} – ${missing
-                .slice(0, 6)
-                .map(({ kind, number }) => `${kind} ${number}`)
-                .join(', ')}`}
-        </span>
+        {judgement.faults.length > 0 ? (
+          <strong className="text-reject">{t('faults', { count: judgement.faults.length })}</strong>
+        ) : null}
+        {saved && (missing.length > 0 || judgement.faults.length === 0) ? <Missing missing={missing} /> : null}
       </div>
-      <span data-saved={saved.kind} className={saved.kind === 'unsaved' ? 'text-reject' : 'text-ink-soft'}>
-        {saved.kind === 'unsaved' ? t('unsaved', { reason: saved.problem.detail ?? saved.problem.title }) : t(saved.kind)}
-      </span>
-      {theirs ? (
-        <Notice kind="unsure" title={t('conflict')}>
-          <p>{t('conflictText', { name: theirs.changed.name, at: theirs.changed.at.slice(11, 16) })}</p>
-          <When at={theirs.changed.at} />
-          <div className="flex gap-2">
-            <Button onClick={draft.takeTheirs}>{t('takeTheirs')}</Button>
-            <Button onClick={draft.keepMine}>{t('keepMine')}</Button>
-          </div>
-        </Notice>
-      ) : null}
-      <div className="ms-auto">{children}</div>
+      {saved ? <Saved saved={saved} /> : null}
+      {children}
     </footer>
   );
 }

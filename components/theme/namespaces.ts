@@ -17,3 +17,4 @@ export { messages as today } from '@/components/today/messages';
 export { messages as trace } from '@/components/trace/messages';
 export { messages as verify } from '@/components/verify/messages';
 export { messages as personnel } from '@/components/personnel/messages';
+export { messages as evidence } from '@/components/evidence/messages';

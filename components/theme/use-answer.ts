@@ -21,6 +21,7 @@ export function useAnswer<Answer>(url: string | null, everyMs = 0): Asked<Answer
   return {
     answer: data,
     problem: error === undefined ? undefined : problemOf(error),
-    renew: (answer) => mutate(answer, answer === undefined),
+    // Without an answer the call is asked again and the present one stays on the page meanwhile.
+    renew: (answer) => (answer === undefined ? mutate() : mutate(answer, false)),
   };
 }
