@@ -1,10 +1,12 @@
 'use client';
 
 import Link from 'next/link';
+import { sendJson } from '@/components/forms/send-json';
+import { HoldDialog } from '@/components/holds/hold-dialog';
 import { useMessages } from '@/components/theme/use-messages';
 import { useAnswer } from '@/components/theme/use-answer';
 import { DataTable } from '@/components/ui/data-table';
-import { ProblemNotice } from '@/components/ui/notice';
+import { Notice, ProblemNotice } from '@/components/ui/notice';
 import { PageHeader } from '@/components/ui/page-header';
 import { LinkButton } from '@/components/ui/button';
 import { Panel } from '@/components/ui/panel';
@@ -38,27 +40,42 @@ function RequirementAction({ part, one, mayInspect }: { part: Part; one: Require
   );
 }
 
+/** Where a segment leads: the inspection that stands for it, the draft, or the row that offers to begin one. */
+function hrefOf({ id, inspection, draft }: Requirement): string {
+  if (draft) return `/inspections/${draft.id}`;
+  return inspection ? `/inspections/${inspection.id}` : `#op-${id}`;
+}
+
 function Route({ part, mayInspect }: { part: Part; mayInspect: boolean }) {
   const t = useMessages('parts');
   return (
-    <Panel title={t('route')} flush>
-      <DataTable<Requirement>
-        caption={t('route')}
-        rows={part.requirements}
-        rowKey={(row) => row.id}
-        columns={[
-          { key: 'operation', title: '#', cell: (row) => row.operation },
-          { key: 'title', title: t('ring'), cell: (row) => row.title, names: true },
-          { key: 'state', title: t('state'), cell: (row) => <StateWord state={row.state} /> },
-          { key: 'act', title: '', cell: (row) => <RequirementAction part={part} one={row} mayInspect={mayInspect} /> },
-        ]}
-      />
+    <Panel title={t('route')}>
+      <div className="grid items-start gap-6 2xl:grid-cols-[20rem_minmax(0,1fr)]">
+        <Ring
+          size="large"
+          held={part.held}
+          pointerOnly
+          segments={part.requirements.map((one) => ({ ...one, title: `${one.operation} ${one.title}`, href: hrefOf(one) }))}
+        />
+        <DataTable<Requirement>
+          caption={t('route')}
+          rows={part.requirements}
+          rowKey={(row) => row.id}
+          columns={[
+            { key: 'operation', title: t('operation'), cell: (row) => <span id={`op-${row.id}`}>{row.operation}</span> },
+            { key: 'title', title: t('ring'), cell: (row) => row.title, names: true },
+            { key: 'state', title: t('state'), cell: (row) => <StateWord state={row.state} /> },
+            { key: 'act', title: t('act'), cell: (row) => <RequirementAction part={part} one={row} mayInspect={mayInspect} /> },
+          ]}
+        />
+      </div>
     </Panel>
   );
 }
 
 function Side({ part }: { part: Part }) {
   const t = useMessages('parts');
+  const lotWords = useMessages('lots');
   return (
     <div className="flex flex-col gap-4">
       <Panel title={t('findings')}>
@@ -75,12 +92,25 @@ function Side({ part }: { part: Part }) {
         </ul>
       </Panel>
       <Panel title={t('holds')}>
-        {part.holds.length === 0
-          ? t('none')
-          : part.holds.map((one) => <p key={one.id}>{`${one.number} ${one.target}: ${one.reason}`}</p>)}
+        {part.holds.length === 0 ? t('none') : null}
+        {part.holds.map((one) => (
+          <p key={one.id}>
+            <Link className="font-mono text-accent underline underline-offset-4" href="/holds">
+              {one.number}
+            </Link>{' '}
+            {one.target}: {one.reason} (<When at={one.placedAt} />)
+          </p>
+        ))}
       </Panel>
       <Panel title={t('certificates')}>
         {part.certificates.length === 0 ? t('none') : null}
+        {part.shipment === null ? null : (
+          <p>
+            <Link className="text-accent underline underline-offset-4" href={`/shipments/${part.shipment}`}>
+              {t('shipment', { number: part.shipment })}
+            </Link>
+          </p>
+        )}
         {part.certificates.map((one) => (
           <p key={one.number}>
             <Link className="text-accent underline underline-offset-4" href={`/certificates/${one.number}`}>
@@ -94,7 +124,10 @@ function Side({ part }: { part: Part }) {
         <ul>
           {part.lots.map((one) => (
             <li key={one.id} style={{ paddingInlineStart: `${String(one.depth)}rem` }}>
-              {one.kind} <span className="font-mono">{one.number}</span>
+              {lotWords(`kinds.${one.kind}`)}{' '}
+              <Link className="font-mono text-accent underline underline-offset-4" href={`/lots/${one.id}`}>
+                {one.number}
+              </Link>
             </li>
           ))}
         </ul>
@@ -105,7 +138,8 @@ function Side({ part }: { part: Part }) {
             <li key={one.id}>
               <Link className="font-mono text-accent underline underline-offset-4" href={`/parts/${one.id}`}>
                 {one.serial}
-              </Link>
+              </Link>{' '}
+              <StateWord state={one.state} />
             </li>
           ))}
         </ul>
@@ -114,21 +148,44 @@ function Side({ part }: { part: Part }) {
   );
 }
 
+interface Props {
+  readonly id: string;
+  readonly mayInspect: boolean;
+  readonly mayHold: boolean;
+}
+
 /** The whole present state of one part. */
-export function PartPage({ id, mayInspect }: { id: string; mayInspect: boolean }) {
+export function PartPage({ id, mayInspect, mayHold }: Props) {
   const t = useMessages('parts');
-  const { answer: part, problem } = useAnswer<Part>(`/api/parts/${id}`);
+  const { answer: part, problem, renew } = useAnswer<Part>(`/api/parts/${id}`);
   if (problem) return <ProblemNotice problem={problem} />;
   if (!part) return <Skeleton lines={8} />;
+  const plan = t('planIssue', { issue: part.planIssue });
   return (
     <div className="flex flex-col gap-4">
       <PageHeader
         title={part.serial}
         code={`${part.partNumber} ${part.revision}`}
-        subtitle={`${part.title} · ${part.cluster}, ${t('position', { position: part.position })} · ${part.customer}`}
-        ring={<Ring segments={part.ring} held={part.held} size="large" pixels={64} />}
-        actions={<LinkButton href={`/trace/${part.id}`}>{t('trace')}</LinkButton>}
+        subtitle={`${part.title} · ${plan} · ${part.cluster}, ${t('position', { position: part.position })} · ${part.customer}`}
+        ring={<Ring segments={part.ring} held={part.held} pixels={64} />}
+        actions={
+          <>
+            <StateWord state={part.held ? 'held' : part.state} />
+            <LinkButton href={`/trace/${part.id}`}>{t('trace')}</LinkButton>
+            {mayHold ? (
+              <HoldDialog
+                target={{ kind: 'part', id, name: part.serial }}
+                onPlaced={() => void sendJson<Part>(`/api/parts/${id}`, { method: 'GET' }).then(renew, () => renew())}
+              />
+            ) : null}
+          </>
+        }
       />
+      {part.holds.map((hold) => (
+        <Notice key={hold.id} kind="held" title={`${hold.number}, ${hold.target}`}>
+          {hold.reason}
+        </Notice>
+      ))}
       <div className="grid gap-4 xl:grid-cols-[minmax(0,1fr)_24rem]">
         <Route part={part} mayInspect={mayInspect} />
         <Side part={part} />

@@ -1,97 +1,59 @@
 'use client';
 
-import { useMemo } from 'react';
 import { DataGrid } from '@/components/grids/data-grid';
-import type { GridColumn } from '@/components/grids/grid-columns';
 import { useUrlFilters } from '@/components/grids/use-url-filters';
+import { useAnswer } from '@/components/theme/use-answer';
 import { useMessages } from '@/components/theme/use-messages';
-import { Button } from '@/components/ui/button';
+import { LinkButton } from '@/components/ui/button';
 import { EmptyState } from '@/components/ui/empty-state';
+import { Notice } from '@/components/ui/notice';
 import { PageHeader } from '@/components/ui/page-header';
 import type { PartSummary } from '@/services/contracts/parts';
+import { CsvButton } from './csv-button';
+import { hrefOfPart, idOfPart, usePartColumns } from './part-columns';
+import { PartsFilters, partsFilterNames } from './parts-filters';
 
-const filterNames = ['serial', 'state', 'findings', 'partNumber', 'cluster', 'held'] as const;
-const states = ['serialised', 'in-process', 'finished', 'released', 'scrapped'] as const;
-
-function useColumns(): GridColumn<PartSummary>[] {
+/** A serial that only one part has is one step from its page. */
+function OneHit({ serial }: { serial: string }) {
   const t = useMessages('parts');
-  return useMemo(
-    () => [
-      { key: 'serial', title: t('serial'), kind: 'serial', width: 130, value: (row) => row.serial },
-      {
-        key: 'partNumber',
-        title: t('partNumber'),
-        kind: 'text',
-        width: 220,
-        value: (row) => `${row.partNumber} ${row.revision}`,
-      },
-      {
-        key: 'ring',
-        title: t('ring'),
-        kind: 'ring',
-        minWidth: 300,
-        value: (row) => ({
-          segments: row.ring,
-          held: row.held,
-          text:
-            row.next === null
-              ? t('done', { met: row.met, required: row.required })
-              : t('next', { met: row.met, required: row.required, next: row.next }),
-        }),
-      },
-      { key: 'state', title: t('state'), kind: 'state', width: 170, value: (row) => (row.held ? 'held' : row.state) },
-      { key: 'cluster', title: t('cluster'), kind: 'text', width: 140, value: (row) => row.cluster },
-      { key: 'customer', title: t('customer'), kind: 'text', width: 180, value: (row) => row.customer },
-    ],
-    [t],
+  const { answer } = useAnswer<{ items: PartSummary[] }>(`/api/parts?limit=2&serial=${encodeURIComponent(serial)}`);
+  const [only, other] = answer?.items ?? [];
+  if (!only || other) return null;
+  return (
+    <Notice
+      title={t('oneHit')}
+      actions={
+        <LinkButton kind="primary" href={hrefOfPart(only)}>
+          {t('openOne', { serial: only.serial })}
+        </LinkButton>
+      }
+    />
   );
 }
-
-const hrefOf = (row: PartSummary) => `/parts/${row.id}`;
-const rowId = (row: PartSummary) => row.id;
 
 /** Find parts: server-paged, with the filters in the address. */
 export function PartsPage() {
   const t = useMessages('parts');
-  const columns = useColumns();
-  const { filters, set, reset, query, filtered } = useUrlFilters(filterNames);
+  const columns = usePartColumns(true);
+  const { filters, set, reset, query, filtered } = useUrlFilters(partsFilterNames);
+  const url = query === '' ? '/api/parts' : `/api/parts?${query}`;
   return (
     <div className="flex h-full flex-col gap-4">
-      <PageHeader title={t('title')} subtitle={t('subtitle')} />
-      <div className="flex flex-wrap items-end gap-4">
-        <label className="flex flex-col gap-1">
-          <span className="font-semibold">{t('find')}</span>
-          <input className="field font-mono" value={filters.serial} onChange={(event) => set({ serial: event.target.value })} />
-        </label>
-        <label className="flex flex-col gap-1">
-          <span className="font-semibold">{t('state')}</span>
-          <select className="field" value={filters.state} onChange={(event) => set({ state: event.target.value })}>
-            <option value="">{t('allStates')}</option>
-            {states.map((state) => (
-              <option key={state} value={state}>
-                {state}
-              </option>
-            ))}
-          </select>
-        </label>
-        <label className="flex items-center gap-2 py-2">
-          <input
-            type="checkbox"
-            checked={filters.findings === 'open'}
-            onChange={(event) => set({ findings: event.target.checked ? 'open' : '' })}
-          />
-          {t('onlyFindings')}
-        </label>
-        {filtered ? <Button onClick={reset}>{t('clear')}</Button> : null}
-      </div>
+      <PageHeader
+        title={t('title')}
+        subtitle={t('subtitle')}
+        actions={<CsvButton label={t('csv')} name="parts.csv" url={url} columns={columns} />}
+      />
+      <PartsFilters filters={filters} set={set} reset={reset} filtered={filtered} />
+      {filters.serial === '' ? null : <OneHit serial={filters.serial} />}
       <DataGrid
         label={t('title')}
         columns={columns}
-        source={{ kind: 'keyset', url: query === '' ? '/api/parts' : `/api/parts?${query}` }}
-        rowId={rowId}
-        hrefOf={hrefOf}
-        empty={<EmptyState title={t('empty')} />}
-        height="calc(100vh - 17rem)"
+        source={{ kind: 'keyset', url }}
+        rowId={idOfPart}
+        hrefOf={hrefOfPart}
+        empty={<EmptyState title={t('empty')}>{t('emptyHint')}</EmptyState>}
+        height="max(20rem, calc(100dvh - 19rem))"
       />
     </div>
   );

@@ -12,6 +12,7 @@ export interface NavigationItem {
     | 'runs'
     | 'exposures'
     | 'lots'
+    | 'holds'
     | 'review'
     | 'shipments'
     | 'certificates'
@@ -39,11 +40,16 @@ const judges = ['reviewer', 'administrator'] as const;
 export const navigation: readonly NavigationItem[] = [
   { href: '/', label: 'today', group: 'work', roles },
   { href: '/parts', label: 'parts', group: 'work', roles: [...staff, 'auditor'] },
+  { href: '/lots', label: 'lots', group: 'work', roles: [...staff, 'auditor'] },
   { href: '/review', label: 'review', group: 'judgement', roles: ['reviewer'] },
   { href: '/shipments', label: 'shipments', group: 'judgement', roles: judges },
+  { href: '/holds', label: 'holds', group: 'judgement', roles: [...staff, 'auditor'] },
   { href: '/certificates', label: 'certificates', group: 'judgement', roles },
   { href: '/personnel', label: 'personnel', group: 'basis', roles: [...staff, 'auditor'] },
   { href: '/trace', label: 'trace', group: 'history', roles: [...staff, 'auditor'] },
+  { href: '/record', label: 'record', group: 'history', roles: ['reviewer', 'administrator', 'auditor'] },
+  { href: '/orders', label: 'orders', group: 'house', roles: [...staff, 'auditor'] },
+  { href: '/customers', label: 'customers', group: 'house', roles: [...staff, 'auditor'] },
   { href: '/people', label: 'people', group: 'house', roles: ['administrator'] },
 ];
 

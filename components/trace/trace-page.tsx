@@ -1,41 +1,36 @@
 'use client';
 
 import Link from 'next/link';
+import { useUrlFilters } from '@/components/grids/use-url-filters';
 import { useAnswer } from '@/components/theme/use-answer';
-import { useMessages } from '@/components/theme/use-messages';
+import { useMessages, useSentences } from '@/components/theme/use-messages';
+import { usePlant } from '@/components/theme/workstation';
+import { LinkButton } from '@/components/ui/button';
 import { Digest } from '@/components/ui/digest';
-import { ProblemNotice } from '@/components/ui/notice';
+import { Notice, ProblemNotice } from '@/components/ui/notice';
 import { PageHeader } from '@/components/ui/page-header';
 import { Panel } from '@/components/ui/panel';
 import { Ring } from '@/components/ui/ring';
 import { Skeleton } from '@/components/ui/skeleton';
+import { StateWord } from '@/components/ui/state-word';
 import { When } from '@/components/ui/when';
 import type { Trace } from '@/services/contracts/trace';
+import { AsOfSwitch } from './as-of-switch';
+import { endOfDay } from './end-of-day';
+import { GenealogyTree } from './genealogy-tree';
+import { TracedCertificates, TracedFindings, TracedHolds } from './traced-decisions';
+import { TracedInspections } from './traced-inspections';
 
-function Inspections({ rows }: { rows: Trace['inspections'] }) {
+function Journal({ events }: { events: Trace['events'] }) {
   const t = useMessages('trace');
+  const kindWords = useSentences('record');
   return (
-    <Panel title={t('inspections')}>
-      <ol className="flex flex-col gap-3">
-        {rows.map((one) => (
-          <li key={one.id} className="border-b border-line pb-3">
-            <Link href={`/inspections/${one.id}`} className="font-mono text-accent underline underline-offset-4">
-              {one.number}
-            </Link>{' '}
-            {one.operation} {one.title}: {t('signed', { verdict: one.verdict, by: one.signedBy })}, <When at={one.signedAt} />
-            {one.ended ? ` (${one.ended})` : ''}
-            <p className="text-sm text-ink-soft">
-              {t('people', { names: one.people.join(', ') })}. {t('equipment', { names: one.equipment.join(', ') || '–' })}.{' '}
-              {t('digest')} <Digest value={one.recordDigest} />
-            </p>
-            {one.evidence.map((file) => (
-              <p key={file.id} className="text-sm">
-                <a href={`/api/evidence/${file.id}`} className="text-accent underline underline-offset-4">
-                  {file.name}
-                </a>{' '}
-                <Digest value={file.sha256} />
-              </p>
-            ))}
+    <Panel title={t('journal')}>
+      <ol className="flex flex-col gap-1">
+        {events.map((event) => (
+          <li key={event.id}>
+            <When at={event.at} to="second" /> <strong>{kindWords(`kinds.${event.kind}`)}</strong>{' '}
+            {t('by', { name: event.actor?.name ?? t('product') })} <Digest value={event.digest} />
           </li>
         ))}
       </ol>
@@ -43,10 +38,62 @@ function Inspections({ rows }: { rows: Trace['inspections'] }) {
   );
 }
 
-/** The whole history of one part, read only. */
+function Siblings({ part }: { part: Trace['part'] }) {
+  const t = useMessages('trace');
+  return (
+    <Panel title={t('siblings')}>
+      {part.siblings.length === 0 ? t('nothing') : null}
+      <ul className="flex flex-wrap gap-x-6 gap-y-1">
+        {part.siblings.map((one) => (
+          <li key={one.id}>
+            <Link href={`/trace/${one.id}`} className="font-mono text-accent underline underline-offset-4">
+              {one.serial}
+            </Link>{' '}
+            <StateWord state={one.state} />
+          </li>
+        ))}
+      </ul>
+    </Panel>
+  );
+}
+
+function Document({ trace }: { trace: Trace }) {
+  const t = useMessages('trace');
+  return (
+    <>
+      <div className="grid gap-4 lg:grid-cols-[minmax(0,2fr)_minmax(0,1fr)]">
+        <Panel title={t('inspections')}>
+          <TracedInspections rows={trace.inspections} />
+        </Panel>
+        <div className="flex flex-col gap-4">
+          <Panel title={t('origin')}>
+            <GenealogyTree lots={trace.genealogy} />
+          </Panel>
+          <Siblings part={trace.part} />
+        </div>
+      </div>
+      <Panel title={t('findings')}>
+        <TracedFindings rows={trace.findings} />
+      </Panel>
+      <Panel title={t('holds')}>
+        <TracedHolds rows={trace.holds} />
+      </Panel>
+      <Panel title={t('certificates')}>
+        <TracedCertificates rows={trace.certificates} />
+      </Panel>
+      <Journal events={trace.events} />
+    </>
+  );
+}
+
+/** The whole history of one part as a document, read only; as of a day when one is chosen. */
 export function TracePage({ id }: { id: string }) {
   const t = useMessages('trace');
-  const { answer, problem } = useAnswer<Trace>(`/api/trace/${id}`);
+  const { timeZone } = usePlant();
+  const { filters, set } = useUrlFilters(['by'] as const);
+  const day = /^\d{4}-\d{2}-\d{2}$/.test(filters.by) ? filters.by : '';
+  const asked = day === '' ? '' : `?recordedBy=${encodeURIComponent(endOfDay(day, timeZone))}`;
+  const { answer, problem } = useAnswer<Trace>(`/api/trace/${id}${asked}`);
   if (problem) return <ProblemNotice problem={problem} />;
   if (!answer) return <Skeleton lines={10} />;
   const { part } = answer;
@@ -55,46 +102,18 @@ export function TracePage({ id }: { id: string }) {
       <PageHeader
         title={t('heading', { serial: part.serial })}
         code={`${part.partNumber} ${part.revision}`}
-        subtitle={`${part.customer} · ${part.state}`}
-        ring={<Ring segments={part.ring} held={part.held} size="large" pixels={64} />}
+        subtitle={`${part.title} · ${part.customer}`}
+        ring={<Ring segments={part.ring} held={part.held} pixels={64} />}
+        actions={
+          <>
+            <StateWord state={part.held ? 'held' : part.state} />
+            <LinkButton href={`/parts/${part.id}`}>{t('part')}</LinkButton>
+          </>
+        }
       />
-      <div className="grid gap-4 lg:grid-cols-[minmax(0,2fr)_minmax(0,1fr)]">
-        <Inspections rows={answer.inspections} />
-        <div className="flex flex-col gap-4">
-          <Panel title={t('origin')}>
-            <ul>
-              {part.lots.map((lot) => (
-                <li key={lot.id} style={{ paddingInlineStart: `${String(lot.depth)}rem` }}>
-                  {lot.kind}{' '}
-                  <Link href={`/lots/${lot.id}`} className="font-mono text-accent underline underline-offset-4">
-                    {lot.number}
-                  </Link>
-                </li>
-              ))}
-            </ul>
-          </Panel>
-          <Panel title={t('certificates')}>
-            {part.certificates.map(({ number, state }) => (
-              <p key={number}>
-                <Link href={`/certificates/${number}`} className="font-mono text-accent underline underline-offset-4">
-                  {number}
-                </Link>{' '}
-                {state}
-              </p>
-            ))}
-          </Panel>
-        </div>
-      </div>
-      <Panel title={t('journal')}>
-        <ol className="flex flex-col gap-1">
-          {answer.events.map((event) => (
-            <li key={event.id}>
-              <When at={event.at} to="second" /> <strong>{event.kind.replaceAll('-', ' ')}</strong>{' '}
-              {t('by', { name: event.actor?.name ?? t('product') })} <Digest value={event.digest} />
-            </li>
-          ))}
-        </ol>
-      </Panel>
+      <AsOfSwitch key={day} day={day} onChoose={(by) => set({ by })} />
+      {day === '' ? null : <Notice title={t('past', { day })} />}
+      <Document trace={answer} />
     </div>
   );
 }

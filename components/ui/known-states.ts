@@ -36,6 +36,8 @@ export const knownStates = {
   withdrawn: { glyph: 'cross', tone: 'reject' },
   acknowledged: { glyph: 'target', tone: 'accept' },
   // things that wait, run or lapse
+  dispositioned: { glyph: 'half-disc', tone: 'accent' },
+  'awaiting-follow-up': { glyph: 'back', tone: 'unsure' },
   closed: { glyph: 'closed', tone: 'accept' },
   queued: { glyph: 'dotted', tone: 'soft' },
   running: { glyph: 'half-disc', tone: 'accent' },

@@ -1,5 +1,6 @@
 import type { z } from 'zod';
-import type { Lot, lotKind, lotRef } from '../../services/contracts/parts';
+import type { RequirementState } from '../../services/contracts/common';
+import type { Lot, lotKind, lotRef, LotStory } from '../../services/contracts/parts';
 import { table } from '../models/table';
 import { isoOf, select, selectOne, sqlTimeOf, type Reading } from '../work';
 
@@ -46,14 +47,45 @@ export const belowLot = `WITH RECURSIVE below (id, depth) AS (
 export const aboveLot = `WITH RECURSIVE above (id, depth) AS (
   SELECT CAST(? AS UUID), 0 UNION SELECT e.parent_id, a.depth + 1 FROM above a JOIN lot_parents e ON e.lot_id = a.id WHERE a.depth < 12)`;
 
-const columns = `l.id, l.kind, l.number, l.quantity, l.attributes, ${isoOf('l.created_at')} AS createdAt,
-  EXISTS (SELECT 1 FROM holds h WHERE h.target_kind = 'lot' AND h.target_id = l.id AND h.lifted_at IS NULL) AS held,
-  (SELECT COUNT(*) FROM parts p WHERE p.cluster_id = l.id) AS partCount`;
+const columns = `l.id, l.kind, l.number, l.quantity, l.attributes, ${isoOf('l.created_at')} AS createdAt`;
 
-type Stored = Omit<Lot, 'attributes' | 'held' | 'parents' | 'children'> & { attributes: string; held: number };
+type Stored = Omit<Lot, 'attributes' | 'held' | 'partCount' | 'parents' | 'children'> & { attributes: string };
 
-function toLot(row: Stored): Omit<Lot, 'parents' | 'children'> {
-  return { ...row, attributes: JSON.parse(row.attributes) as Record<string, string>, held: row.held === 1 };
+/** Which of these lots a hold reaches: on the lot itself or on one it came from. */
+async function heldAmong(reading: Reading, ids: readonly string[]): Promise<Set<string>> {
+  const rows = await select<{ start: string }>(
+    reading,
+    `WITH RECURSIVE above (start, id, depth) AS (
+       SELECT id, id, 0 FROM lots WHERE id IN (?) UNION SELECT a.start, e.parent_id, a.depth + 1 FROM above a JOIN lot_parents e ON e.lot_id = a.id WHERE a.depth < 12)
+     SELECT DISTINCT a.start FROM above a JOIN holds h ON h.target_kind = 'lot' AND h.target_id = a.id AND h.lifted_at IS NULL`,
+    [ids],
+  );
+  return new Set(rows.map(({ start }) => start));
+}
+
+/** How many parts came from each of these lots, through whatever lies between. */
+async function partCountsOf(reading: Reading, ids: readonly string[]): Promise<Map<string, number>> {
+  const rows = await select<{ start: string; count: number }>(
+    reading,
+    `WITH RECURSIVE below (start, id, depth) AS (
+       SELECT id, id, 0 FROM lots WHERE id IN (?) UNION SELECT b.start, e.lot_id, b.depth + 1 FROM below b JOIN lot_parents e ON e.parent_id = b.id WHERE b.depth < 12)
+     SELECT b.start, COUNT(DISTINCT p.id) AS count FROM below b JOIN parts p ON p.cluster_id = b.id GROUP BY b.start`,
+    [ids],
+  );
+  return new Map(rows.map(({ start, count }) => [start, count]));
+}
+
+async function toLots(reading: Reading, rows: readonly Stored[]): Promise<Omit<Lot, 'parents' | 'children'>[]> {
+  if (rows.length === 0) return [];
+  const ids = rows.map(({ id }) => id);
+  const held = await heldAmong(reading, ids);
+  const counts = await partCountsOf(reading, ids);
+  return rows.map((row) => ({
+    ...row,
+    attributes: JSON.parse(row.attributes) as Record<string, string>,
+    held: held.has(row.id),
+    partCount: counts.get(row.id) ?? 0,
+  }));
 }
 
 /** Lots newest first before a key, filtered by kind and by the start of the number. */
@@ -82,12 +114,13 @@ export async function listLots(
     `SELECT ${columns} FROM lots l WHERE ${where.join(' AND ')} ORDER BY l.created_at DESC, l.id DESC LIMIT ?`,
     [...values, limit],
   );
-  return rows.map(toLot);
+  return toLots(reading, rows);
 }
 
 export async function lotById(reading: Reading, lotId: string): Promise<Lot | undefined> {
   const row = await selectOne<Stored>(reading, `SELECT ${columns} FROM lots l WHERE l.id = ?`, [lotId]);
-  if (!row) return undefined;
+  const [lot] = row ? await toLots(reading, [row]) : [];
+  if (!lot) return undefined;
   const parents = await select<Ref>(
     reading,
     'SELECT l.id, l.kind, l.number FROM lot_parents e JOIN lots l ON l.id = e.parent_id WHERE e.lot_id = ? ORDER BY l.kind, l.number',
@@ -98,7 +131,7 @@ export async function lotById(reading: Reading, lotId: string): Promise<Lot | un
     'SELECT l.id, l.kind, l.number FROM lot_parents e JOIN lots l ON l.id = e.lot_id WHERE e.parent_id = ? ORDER BY l.kind, l.number LIMIT 500',
     [lotId],
   );
-  return { ...toLot(row), parents, children };
+  return { ...lot, parents, children };
 }
 
 /** Clusters by id or number. */
@@ -130,4 +163,14 @@ export async function partIdsBelow(reading: Reading, lotId: string): Promise<str
     [lotId],
   );
   return rows.map(({ id }) => id);
+}
+
+/** Requirements of all parts downstream of a lot, counted by state. */
+export async function progressBelow(reading: Reading, lotId: string): Promise<LotStory['progress']> {
+  const rows = await select<{ state: RequirementState; count: number }>(
+    reading,
+    `${belowLot} SELECT r.state, COUNT(*) AS count FROM part_requirements r JOIN parts p ON p.id = r.part_id WHERE p.cluster_id IN (SELECT id FROM below) GROUP BY r.state`,
+    [lotId],
+  );
+  return Object.fromEntries(rows.map(({ state, count }) => [state, count]));
 }

@@ -12,7 +12,12 @@ export interface PartsFilter {
   readonly findings?: string | undefined;
   /** Only parts downstream of this lot. */
   readonly belowLotId?: string | undefined;
+  /** Only these. */
+  readonly ids?: readonly string[] | undefined;
 }
+
+/** By serial, by serial backwards, or newest first. */
+export type PartsOrder = 'serial' | '-serial' | 'newest';
 
 type Stored = Parameters<typeof toPartSummary>[0];
 
@@ -37,15 +42,25 @@ function conditions(filter: PartsFilter): { where: string[]; values: unknown[] }
     values.push(filter.held === 'true' ? 1 : 0);
   }
   if (filter.findings === 'open') where.push('p.open_findings > 0');
+  if (filter.ids) {
+    where.push('p.id IN (?)');
+    values.push(filter.ids);
+  }
   if (filter.belowLotId) where.push('p.cluster_id IN (SELECT id FROM below)');
   return { where, values };
 }
 
-/** Parts after a key in the chosen order: by serial, or newest first. */
+const orders: Record<PartsOrder, string> = {
+  serial: 'p.serial, p.id',
+  '-serial': 'p.serial DESC, p.id DESC',
+  newest: 'p.id DESC',
+};
+
+/** Parts after a key in the chosen order. */
 export async function listParts(
   reading: Reading,
   filter: PartsFilter,
-  sort: 'serial' | 'newest',
+  sort: PartsOrder,
   limit: number,
   after: readonly [string, string] | null,
 ): Promise<PartSummary[]> {
@@ -54,15 +69,18 @@ export async function listParts(
     where.push('p.serial >= ? AND (p.serial > ? OR p.id > ?)');
     values.push(after[0], after[0], after[1]);
   }
+  if (after && sort === '-serial') {
+    where.push('p.serial <= ? AND (p.serial < ? OR p.id < ?)');
+    values.push(after[0], after[0], after[1]);
+  }
   if (after && sort === 'newest') {
     // UUIDv7 ids rise with time, so the id alone is the key.
     where.push('p.id < ?');
     values.push(after[1]);
   }
-  const order = sort === 'serial' ? 'p.serial, p.id' : 'p.id DESC';
   const rows = await select<Stored>(
     reading,
-    `${filter.belowLotId ? belowLot : ''} SELECT ${partColumns} ${partJoins} ${where.length > 0 ? `WHERE ${where.join(' AND ')}` : ''} ORDER BY ${order} LIMIT ?`,
+    `${filter.belowLotId ? belowLot : ''} SELECT ${partColumns} ${partJoins} ${where.length > 0 ? `WHERE ${where.join(' AND ')}` : ''} ORDER BY ${orders[sort]} LIMIT ?`,
     [...(filter.belowLotId ? [filter.belowLotId] : []), ...values, limit],
   );
   return rows.map(toPartSummary);

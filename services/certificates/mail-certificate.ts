@@ -7,7 +7,10 @@ import { environment } from '@/services/environment';
 import { certificateMail } from '@/services/mail/certificate-mail';
 import { sendMail } from '@/services/mail/send-mail';
 
-/** Tells the customer's quality contact that a certificate is there. At least once; the message id is the certificate's. */
+/**
+ * Tells the customer's quality contact that a certificate is there. A mail on record is not sent again; should the server
+ * take it and the record then fail, a second one carries the same message id.
+ */
 export async function mailCertificate(certificateId: string): Promise<{ readonly to: string }> {
   const certificate = await certificateById(reading(), certificateId);
   if (!certificate) throw new Error(`certificate ${certificateId} is not there`);
@@ -20,6 +23,11 @@ export async function mailCertificate(certificateId: string): Promise<{ readonly
   const plant = await thePlant(reading());
   const { RINGTRUE_BASE_URL: address } = environment();
   const mail = certificateMail(customer.locale, { number: certificate.number, address, plant: plant.name });
+  const sent = await selectOne(reading(), `SELECT id FROM mails WHERE recipient = ? AND subject = ? AND state = 'sent' LIMIT 1`, [
+    customer.email,
+    mail.subject,
+  ]);
+  if (sent) return { to: customer.email };
   await sendMail({ ...mail, to: customer.email, messageId: `<${certificateId}@${new URL(address).hostname}>` });
   await inTransaction(null, async (work) => {
     await execute(

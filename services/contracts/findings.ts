@@ -32,6 +32,22 @@ export const finding = findingSummary.extend({
   inspection: z
     .object({ id, number: z.string(), signedBy: z.string(), signedById: id, signedAt: instant, verdict: z.string() })
     .nullable(),
+  /** What the inspection recorded that was not accepted: readings in their unit, indications in millimetres. */
+  failed: z.object({
+    readings: z.array(z.object({ characteristic: z.string(), value: z.string(), unit: z.string(), verdict: z.string() })),
+    indications: z.array(
+      z.object({
+        label: z.string(),
+        type: z.string(),
+        view: z.string().nullable(),
+        lengthMm: z.string().nullable(),
+        widthMm: z.string().nullable(),
+        verdict: z.string(),
+      }),
+    ),
+  }),
+  /** Files of the inspection, for GET /api/evidence/{id}. */
+  evidence: z.array(z.object({ id, name: z.string(), kind: z.string(), role: z.string(), view: z.string().nullable() })),
   dispositions: z.array(disposition),
   /** Earlier and later inspections of the same requirement of this part. */
   history: z.array(z.object({ id, number: z.string(), verdict: z.string(), signedBy: z.string(), signedAt: instant })),
@@ -47,7 +63,7 @@ export const listFindings = operation({
   name: 'list-findings',
   method: 'GET',
   path: '/api/findings',
-  summary: 'Findings, oldest open first.',
+  summary: 'Findings that are not closed, the undecided ones first, each oldest first; or those of a state.',
   changes: false,
   query: pageQuery.extend({ state: z.enum(['open', 'awaiting-follow-up', 'closed']).optional() }),
   response: page(findingSummary),
@@ -75,7 +91,9 @@ export const dispositionFinding = operation({
   body: z.strictObject({
     decision,
     reason: words(1000, 5),
+    /** Rework: keys of the operations to repeat besides the finding's own; left out, what the plan's rework reopens. */
     repeat: z.array(z.string().max(60)).max(100).optional(),
+    /** The kind of rework of the plan; what that kind reopens is always repeated. */
     scheme: words(60).optional(),
     password,
   }),

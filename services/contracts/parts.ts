@@ -14,11 +14,21 @@ export const lot = z.object({
   attributes: z.record(z.string(), z.string()),
   parents: z.array(lotRef),
   children: z.array(lotRef),
+  /** A hold stands on this lot or on one it came from. */
   held: z.boolean(),
+  /** Parts downstream. */
   partCount: z.int(),
   createdAt: instant,
 });
 export type Lot = z.output<typeof lot>;
+
+/** A lot with what stands over it and how far everything downstream has come. */
+export const lotStory = lot.extend({
+  holds: z.array(z.object({ id, number: z.string(), reason: z.string(), target: z.string(), placedAt: instant })),
+  /** Requirements of all parts downstream, by state. */
+  progress: z.partialRecord(requirementState, z.int()),
+});
+export type LotStory = z.output<typeof lotStory>;
 
 export const listLots = operation({
   name: 'list-lots',
@@ -52,10 +62,10 @@ export const readLot = operation({
   name: 'read-lot',
   method: 'GET',
   path: '/api/lots/{id}',
-  summary: 'One lot.',
+  summary: 'One lot, the lots it came from and that came from it, and how far everything downstream has come.',
   changes: false,
   params: z.object({ id }),
-  response: lot,
+  response: lotStory,
   status: 200,
 });
 
@@ -119,7 +129,7 @@ export const partsFilter = z.object({
   cluster: z.string().max(40).optional(),
   held: z.enum(['true', 'false']).optional(),
   findings: z.enum(['open']).optional(),
-  sort: z.enum(['serial', 'newest']).default('serial'),
+  sort: z.enum(['serial', '-serial', 'newest']).default('serial'),
 });
 
 export const listParts = operation({

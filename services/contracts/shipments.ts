@@ -88,6 +88,18 @@ export const changeShipmentParts = operation({
   status: 200,
 });
 
+export const removeShipmentParts = operation({
+  name: 'remove-shipment-parts',
+  method: 'DELETE',
+  path: '/api/shipments/{number}/parts',
+  summary: 'Take serials off an open shipment.',
+  changes: true,
+  params: byNumber,
+  body: z.strictObject({ serials }),
+  response: shipment,
+  status: 200,
+});
+
 export const releaseShipment = operation({
   name: 'release-shipment',
   method: 'POST',
@@ -96,6 +108,13 @@ export const releaseShipment = operation({
   changes: true,
   params: byNumber,
   body: z.strictObject({ password }),
-  response: z.object({ certificate: z.string(), state: z.literal('signed'), serials: z.array(z.string()), sentence: z.string() }),
+  response: z.object({
+    certificate: z.string(),
+    state: z.literal('signed'),
+    /** The job that lays out, seals and stores the certificate. */
+    job: id,
+    serials: z.array(z.string()),
+    sentence: z.string(),
+  }),
   status: 201,
 });

@@ -1,13 +1,16 @@
 import { createHash } from 'node:crypto';
 import { newId } from '@/db/identity';
 import { takeRows } from '@/db/lock';
-import { findingByNumber, historyOf, type FindingRow } from '@/db/repositories/findings';
-import { requirementsOfPlan } from '@/db/repositories/plans';
+import { endDraft, liveDraft } from '@/db/repositories/drafts';
+import { appendEvent } from '@/db/repositories/events';
+import { findingByNumber, historyOf, reworkCycles, type FindingRow } from '@/db/repositories/findings';
+import { planById, requirementsOfPlan } from '@/db/repositories/plans';
 import { execute, selectOne, sqlTimeOf, type Work } from '@/db/work';
 import type { Actor } from '@/services/contracts/actor';
 import { dispositionSentence } from '@/services/contracts/disposition-sentence';
 import type { Decision, dispositionFinding as contract, Finding } from '@/services/contracts/findings';
 import type { BodyOf } from '@/services/contracts/operation';
+import type { Plan } from '@/services/contracts/plan-content';
 import { canonicalJson } from '@/services/engine/record/canonical';
 import { notFound, Problem } from '@/services/http/problem';
 import type { Recorded } from '@/services/http/route';
@@ -28,8 +31,14 @@ const leadsTo: Readonly<Record<Decision, FindingRow['state']>> = {
   scrap: 'closed',
 };
 
+/** Part states in which operations can be repeated. */
+const repeatable: readonly string[] = ['serialised', 'in-process', 'finished', 'returned'];
+
 function refuse(actor: Actor, row: FindingRow, evaluators: ReadonlySet<string>, decision: Decision): void {
   if (row.state === 'closed') throw new Problem('state-refused', `Finding ${row.number} is closed.`);
+  // A scrapped part may have further findings; they are closed by saying so of each.
+  if (!repeatable.includes(row.partState) && !(row.partState === 'scrapped' && decision === 'scrap'))
+    throw new Problem('state-refused', `Serial ${row.serial} is ${row.partState}; only a part in the plant can be decided on.`);
   if (evaluators.has(actor.id))
     throw new Problem('not-permitted', 'Nobody decides a finding on an inspection they signed themselves.');
   if (decision === 'use-as-is' || decision === 'repair') {
@@ -41,6 +50,19 @@ function refuse(actor: Actor, row: FindingRow, evaluators: ReadonlySet<string>, 
   }
 }
 
+/** Ends the live draft of a requirement that is reopened: what was measured before the rework does not count after it. */
+async function endLiveDraft(work: By, row: FindingRow, requirementId: string): Promise<void> {
+  const draft = await liveDraft(work, row.partId, requirementId);
+  if (!draft || !(await endDraft(work, draft.id, 'abandoned'))) return;
+  await appendEvent(work, {
+    kind: 'inspection-abandoned',
+    subject: { kind: 'inspection', id: draft.id },
+    also: [{ kind: 'part', id: row.partId }],
+    details: { reason: `reopened by finding ${row.number}`, shownReject: draft.shownReject, version: draft.version },
+  });
+}
+
+/** Sets operations to be repeated, each in its next cycle. Problem invalid-input names keys that are not in the route. */
 async function reopen(work: By, row: FindingRow, keys: readonly string[], reason: string): Promise<void> {
   const route = await requirementsOfPlan(work, row.planId);
   const unknown = keys.flatMap((key, at) =>
@@ -49,25 +71,53 @@ async function reopen(work: By, row: FindingRow, keys: readonly string[], reason
       : [{ path: `repeat.${String(at)}`, message: `${key} is not an operation of the route` }],
   );
   if (unknown.length > 0) throw new Problem('invalid-input', 'repeat: names operations that are not in the route', unknown);
-  for (const key of keys) {
-    const requirement = route.find((one) => one.key === key);
+  for (const { id } of route.filter(({ key }) => keys.includes(key))) {
+    await endLiveDraft(work, row, id);
     await execute(
       work,
       `UPDATE part_requirements SET state = 'to-be-repeated', cycle = cycle + 1, reason = ? WHERE part_id = ? AND requirement_id = ?`,
-      [reason, row.partId, requirement?.id ?? ''],
+      [reason, row.partId, id],
     );
   }
 }
 
-/** What the decision does to part, requirement and inspection. */
+/** The kind of rework that is named, with cycles left. Problems invalid-input (not in the plan), state-refused (used up). */
+async function namedRework(work: By, row: FindingRow, scheme: string, kinds: Plan['rework']): Promise<Plan['rework'][number]> {
+  const named = kinds.find(({ kind }) => kind === scheme);
+  if (!named)
+    throw new Problem('invalid-input', `scheme: ${scheme} is no kind of rework of the plan`, [
+      { path: 'scheme', message: 'is no kind of rework of the plan' },
+    ]);
+  const before = await reworkCycles(work, row.partId, scheme);
+  if (before >= named.mostCycles)
+    throw new Problem(
+      'state-refused',
+      `${named.title} was ordered ${String(before)} time(s) on serial ${row.serial}; the plan allows ${String(named.mostCycles)}.`,
+      [{ path: 'scheme', message: `the plan allows ${String(named.mostCycles)} cycle(s)` }],
+    );
+  return named;
+}
+
+/**
+ * Operations repeated after rework: those chosen, the finding's own, and what the named kind of rework reopens by the
+ * plan. Where nothing is named, what any kind of the plan reopens: rather one operation too many.
+ */
+async function repeatedAfterRework(work: By, row: FindingRow, { repeat, scheme }: Body): Promise<string[]> {
+  const kinds = (await planById(work, row.planId))?.rework ?? [];
+  const named = scheme === undefined ? [] : [await namedRework(work, row, scheme, kinds)];
+  const counted = named.length > 0 || repeat !== undefined ? named : kinds;
+  // What was chosen comes first, so that a refusal's path fits what was sent.
+  return [...new Set([...(repeat ?? []), row.key, ...counted.flatMap(({ reopens }) => reopens)])];
+}
+
+/** What the decision does to part, requirement and inspection; answers the operations to be repeated. */
 async function carryOut(work: By, row: FindingRow, body: Body): Promise<readonly string[]> {
   if (body.decision === 'scrap') {
     await execute(work, `UPDATE parts SET state = 'scrapped' WHERE id = ?`, [row.partId]);
     return [];
   }
   if (body.decision === 'refer') return [];
-  const keys =
-    body.decision === 'rework' && body.repeat && body.repeat.length > 0 ? [...new Set([row.key, ...body.repeat])] : [row.key];
+  const keys = body.decision === 'rework' ? await repeatedAfterRework(work, row, body) : [row.key];
   if (body.decision === 'void' && row.inspectionId) {
     await execute(
       work,
@@ -75,8 +125,7 @@ async function carryOut(work: By, row: FindingRow, body: Body): Promise<readonly
       [row.inspectionId, body.reason.slice(0, 400), work.actor.id, sqlTimeOf(work.now)],
     );
   }
-  const reasons: Partial<Record<Decision, string>> = { void: 'void', rework: 'rework', 're-interpretation': 're-interpretation' };
-  await reopen(work, row, keys, `${reasons[body.decision] ?? body.decision}: ${row.number}`);
+  await reopen(work, row, keys, `${body.decision}: ${row.number}`);
   return keys;
 }
 
@@ -165,7 +214,7 @@ export async function dispositionFinding(work: By, number: string, body: Body): 
       {
         subject: { kind: 'finding', id: row.id },
         also: [{ kind: 'part', id: row.partId }],
-        details: { finding: number, serial: row.serial, decision: body.decision, reason: body.reason, repeat, digest },
+        details: { finding: number, serial: row.serial, decision: body.decision, reason: body.reason, repeat, state, digest },
       },
     ],
   };

@@ -1,4 +1,13 @@
-import { dispositionsOf, findingByNumber, historyOf, listFindings as rowsOf, toSummary } from '@/db/repositories/findings';
+import {
+  dispositionsOf,
+  evidenceOf,
+  failedIn,
+  findingByNumber,
+  historyOf,
+  listFindings as rowsOf,
+  rankOf,
+  toSummary,
+} from '@/db/repositories/findings';
 import { planById, requirementsOfPlan } from '@/db/repositories/plans';
 import type { Reading } from '@/db/work';
 import type { Finding, listFindings as contract } from '@/services/contracts/findings';
@@ -6,14 +15,15 @@ import type { AnswerOf, QueryOf } from '@/services/contracts/operation';
 import { pageOf, partsOfKey } from '@/services/http/keyset';
 import { notFound } from '@/services/http/problem';
 
-/** Findings that need judgement or follow-up, oldest first. */
+/** Findings that need judgement first, then those that wait for their follow-up; each oldest first. */
 export async function listFindings(reading: Reading, query: QueryOf<typeof contract>): Promise<AnswerOf<typeof contract>> {
-  const after = partsOfKey(query.after, 2);
-  const rows = await rowsOf(reading, query.state, query.limit + 1, after && [String(after[0]), String(after[1])]);
-  return pageOf(rows, query.limit, ({ openedAt, id }) => [openedAt, id], toSummary);
+  const [rank, openedAt, id] = partsOfKey(query.after, 3) ?? [];
+  const after = rank === undefined ? null : { rank: Number(rank), openedAt: String(openedAt), id: String(id) };
+  const rows = await rowsOf(reading, query.state, query.limit + 1, after);
+  return pageOf(rows, query.limit, (row) => [rankOf(row), row.openedAt, row.id], toSummary);
 }
 
-/** One finding with what was decided and the history of its requirement. Problem not-found. */
+/** One finding with what failed, its files, what was decided and the history of its requirement. Problem not-found. */
 export async function readFinding(reading: Reading, number: string): Promise<Finding> {
   const row = await findingByNumber(reading, number);
   if (!row) throw notFound(`Finding ${number}`);
@@ -24,6 +34,8 @@ export async function readFinding(reading: Reading, number: string): Promise<Fin
     ...toSummary(row),
     id: row.id,
     inspection: history.find(({ id }) => id === row.inspectionId) ?? null,
+    failed: row.inspectionId === null ? { readings: [], indications: [] } : await failedIn(reading, row.inspectionId),
+    evidence: row.inspectionId === null ? [] : await evidenceOf(reading, row.inspectionId),
     dispositions: await dispositionsOf(reading, row.id),
     history,
     operations: route.map(({ key, operation, title }) => ({ key, operation, title })),

@@ -32,15 +32,29 @@ async function requireTarget(work: Work, target: BodyOf<typeof placeContract>['t
   if (!found) throw notFound(target.kind === 'part' ? 'Part' : 'Lot');
 }
 
+/** Takes the parts a target reaches, then the lot, then the parts that got their serials while the lot was waited for. */
+async function takeReached(work: Work, target: { readonly kind: 'part' | 'lot'; readonly id: string }): Promise<string[]> {
+  const first = await partsUnder(work, target);
+  await takeRows(work, 'parts', first);
+  if (target.kind === 'part') return first;
+  await takeRows(work, 'lots', [target.id]);
+  const now = await partsUnder(work, target);
+  const known = new Set(first);
+  await takeRows(
+    work,
+    'parts',
+    now.filter((id) => !known.has(id)),
+  );
+  return now;
+}
+
 /**
  * Holds a part, or a lot with everything downstream. The part rows are written first, in id order, and the lot after
  * them: a release at the same instant either sees the hold or was first and is answered as a recall.
  */
 export async function placeHold(work: By, body: BodyOf<typeof placeContract>): Promise<Recorded<Hold>> {
   await requireTarget(work, body.target);
-  const partIds = await partsUnder(work, body.target);
-  await takeRows(work, 'parts', partIds);
-  if (body.target.kind === 'lot') await takeRows(work, 'lots', [body.target.id]);
+  const partIds = await takeReached(work, body.target);
   const id = newId();
   const number = await nextNumber(work, 'H');
   await execute(
@@ -75,9 +89,7 @@ export async function placeHold(work: By, body: BodyOf<typeof placeContract>): P
 export async function liftHold(work: By, holdId: string, reason: string): Promise<Recorded<Hold>> {
   const known = await holdById(work, holdId);
   if (!known) throw notFound('Hold');
-  const partIds = await partsUnder(work, known.target);
-  await takeRows(work, 'parts', partIds);
-  if (known.target.kind === 'lot') await takeRows(work, 'lots', [known.target.id]);
+  const partIds = await takeReached(work, known.target);
   const lifted = await execute(
     work,
     'UPDATE holds SET lifted_by = ?, lifted_at = ?, lifted_reason = ?, version = version + 1 WHERE id = ? AND lifted_at IS NULL',

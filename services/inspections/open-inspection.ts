@@ -55,6 +55,7 @@ function refuseRequirement(standing: PartRequirement, repeat: RepeatReason | und
 function repeatReasonOf(standing: PartRequirement, asked: RepeatReason | undefined): RepeatReason | null {
   if (asked !== undefined) return asked;
   if (standing.state !== 'to-be-repeated') return null;
+  if (standing.reason?.startsWith('re-interpretation')) return 're-read';
   return standing.reason?.startsWith('void') ? 'repeat' : 're-inspect-after-rework';
 }
 

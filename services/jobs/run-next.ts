@@ -1,4 +1,5 @@
-import { execute, inTransaction, selectOne, sqlTimeOf } from '@/db/work';
+import { databaseFault } from '@/db/fault';
+import { execute, inTransaction, selectOne, sqlTimeOf, type Work } from '@/db/work';
 import type { JobKind, JobPayloads } from './enqueue';
 
 export type Handlers = { readonly [K in JobKind]: (payload: JobPayloads[K]) => Promise<unknown> };
@@ -14,15 +15,29 @@ const mostAttempts = 12;
 // A worker that died leaves its job running; after this it is taken again.
 const leaseMinutes = 10;
 
+const columns = 'SELECT id, kind, payload, attempts FROM jobs';
+const firstFree = 'ORDER BY run_after LIMIT 1 FOR UPDATE SKIP LOCKED';
+
+/**
+ * The next due job, or one that a dead worker left. Two queries, each along the index: one with OR would be sorted
+ * first, and lock every due job against the other workers.
+ */
+async function dueJob(work: Work): Promise<Taken | undefined> {
+  const now = sqlTimeOf(work.now);
+  const waiting = await selectOne<Taken>(work, `${columns} WHERE state = 'waiting' AND run_after <= ? ${firstFree}`, [now]);
+  return (
+    waiting ??
+    selectOne<Taken>(
+      work,
+      `${columns} WHERE state = 'running' AND run_after <= ? AND started_at < ? - INTERVAL ? MINUTE ${firstFree}`,
+      [now, now, leaseMinutes],
+    )
+  );
+}
+
 async function take(): Promise<Taken | undefined> {
   return inTransaction(null, async (work) => {
-    const job = await selectOne<Taken>(
-      work,
-      `SELECT id, kind, payload, attempts FROM jobs
-       WHERE (state = 'waiting' AND run_after <= ?) OR (state = 'running' AND run_after <= ? AND started_at < ? - INTERVAL ? MINUTE)
-       ORDER BY run_after LIMIT 1 FOR UPDATE SKIP LOCKED`,
-      [sqlTimeOf(work.now), sqlTimeOf(work.now), sqlTimeOf(work.now), leaseMinutes],
-    );
+    const job = await dueJob(work);
     if (job)
       await execute(work, `UPDATE jobs SET state = 'running', attempts = attempts + 1, started_at = ? WHERE id = ?`, [
         sqlTimeOf(work.now),
@@ -30,6 +45,13 @@ async function take(): Promise<Taken | undefined> {
       ]);
     return job;
   });
+}
+
+/** What is kept and logged of a failure: of the database's only the code, since its messages hold parameters. */
+function said(error: unknown): string {
+  const fault = databaseFault(error);
+  if (fault) return `database: ${fault.code}`;
+  return (error instanceof Error ? `${error.name}: ${error.message}` : String(error)).slice(0, 1000);
 }
 
 /** Takes one due job and runs it; false when none was due. A failure is kept and tried again later, slower each time. */
@@ -46,7 +68,7 @@ export async function runNext(handlers: Handlers): Promise<boolean> {
       ),
     );
   } catch (error) {
-    const message = (error instanceof Error ? `${error.name}: ${error.message}` : String(error)).slice(0, 1000);
+    const message = said(error);
     console.error(`job ${job.kind} ${job.id} failed (try ${String(job.attempts + 1)}): ${message}`);
     const state = job.attempts + 1 >= mostAttempts ? 'failed' : 'waiting';
     const waitSeconds = Math.min(600, 2 ** (job.attempts + 1));

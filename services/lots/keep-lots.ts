@@ -1,7 +1,8 @@
 import { newId } from '@/db/identity';
 import { takeRows } from '@/db/lock';
 import { insert, insertAll } from '@/db/models/table';
-import { listLots as rowsOf, lotById, lotParents, lots } from '@/db/repositories/lots';
+import { listLots as rowsOf, lotById, lotParents, lots, lotsAbove, progressBelow } from '@/db/repositories/lots';
+import { holdsOver } from '@/db/repositories/part-story';
 import { execute, select, type Reading, type Work } from '@/db/work';
 import type { Actor } from '@/services/contracts/actor';
 import type { AnswerOf, BodyOf, QueryOf } from '@/services/contracts/operation';
@@ -10,6 +11,7 @@ import type {
   listLotParts as partsContract,
   listLots as listContract,
   Lot,
+  LotStory,
   splitLot as splitContract,
 } from '@/services/contracts/parts';
 import { pageOf, partsOfKey } from '@/services/http/keyset';
@@ -31,8 +33,20 @@ export async function listLots(reading: Reading, query: QueryOf<typeof listContr
   );
 }
 
-/** One lot with the lots it came from and that came from it. Problem not-found. */
-export async function readLot(reading: Reading, lotId: string): Promise<Lot> {
+/** One lot with the holds over it and how far everything downstream has come. Problem not-found. */
+export async function readLot(reading: Reading, lotId: string): Promise<LotStory> {
+  const lot = await requireLot(reading, lotId);
+  const above = await lotsAbove(reading, lotId);
+  // A lot is no part: its own id only fills the place of one.
+  const holds = await holdsOver(
+    reading,
+    lotId,
+    above.map(({ id }) => id),
+  );
+  return { ...lot, holds, progress: await progressBelow(reading, lotId) };
+}
+
+async function requireLot(reading: Reading, lotId: string): Promise<Lot> {
   const lot = await lotById(reading, lotId);
   if (!lot) throw notFound('Lot');
   return lot;
@@ -44,7 +58,7 @@ export async function listLotParts(
   lotId: string,
   query: QueryOf<typeof partsContract>,
 ): Promise<AnswerOf<typeof partsContract>> {
-  await readLot(reading, lotId);
+  await requireLot(reading, lotId);
   return pageOfParts(reading, { belowLotId: lotId }, { sort: 'serial', limit: query.limit, after: query.after });
 }
 
@@ -79,7 +93,7 @@ export async function createLot(work: By, body: BodyOf<typeof createContract>): 
     parents.map((parentId) => ({ lotId: id, parentId, fromAt: work.now })),
   );
   return {
-    answer: await readLot(work, id),
+    answer: await requireLot(work, id),
     events: [
       {
         subject: { kind: 'lot', id },
@@ -93,7 +107,7 @@ export async function createLot(work: By, body: BodyOf<typeof createContract>): 
 /** Takes a quantity into a new lot of the same kind and origin; the remainder stays. */
 export async function splitLot(work: By, lotId: string, body: BodyOf<typeof splitContract>): Promise<Recorded<Lot>> {
   await takeRows(work, 'lots', [lotId]);
-  const lot = await readLot(work, lotId);
+  const lot = await requireLot(work, lotId);
   if (body.quantity >= lot.quantity)
     throw new Problem('invalid-input', 'quantity: must leave a remainder', [
       { path: 'quantity', message: `must be less than ${String(lot.quantity)}, so that a remainder stays` },

@@ -6,6 +6,7 @@ import * as findings from '@/services/contracts/findings';
 import * as health from '@/services/contracts/health';
 import * as inspections from '@/services/contracts/inspections';
 import * as openapi from '@/services/contracts/openapi';
+import * as jobs from '@/services/contracts/jobs';
 import type { Operation } from '@/services/contracts/operation';
 import * as orders from '@/services/contracts/orders';
 import * as parts from '@/services/contracts/parts';
@@ -17,7 +18,7 @@ import * as trace from '@/services/contracts/trace';
 
 /** Every contract module that holds calls; a route whose contract is not here fails tests/routes/openapi.test.ts. */
 const modules: readonly object[] = [
-  ...[accounts, certificates, evaluate, evidence, findings, health, inspections, openapi],
+  ...[accounts, certificates, evaluate, evidence, findings, health, inspections, jobs, openapi],
   ...[orders, parts, personnel, plans, session, shipments, trace],
 ];
 

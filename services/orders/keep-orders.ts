@@ -1,15 +1,35 @@
 import { newId, nextNumber } from '@/db/identity';
 import { customerByKey } from '@/db/repositories/drawings';
-import { ordersWithLines } from '@/db/repositories/orders';
+import { listOrders as rowsOf, orderById } from '@/db/repositories/orders';
 import { execute, selectOne, sqlTimeOf, type Reading, type Work } from '@/db/work';
-import type { BodyOf } from '@/services/contracts/operation';
-import type { createOrder as contract, Order } from '@/services/contracts/orders';
+import type { AnswerOf, BodyOf, QueryOf } from '@/services/contracts/operation';
+import type { createOrder as contract, listOrders as listContract, Order } from '@/services/contracts/orders';
+import { pageOf, partsOfKey } from '@/services/http/keyset';
 import { Problem, type FieldError } from '@/services/http/problem';
 import type { Recorded } from '@/services/http/route';
 
 /** Orders, newest first. */
-export async function listOrders(reading: Reading): Promise<{ items: Order[]; next: null }> {
-  return { items: await ordersWithLines(reading), next: null };
+export async function listOrders(reading: Reading, query: QueryOf<typeof listContract>): Promise<AnswerOf<typeof listContract>> {
+  const before = partsOfKey(query.after, 2);
+  const rows = await rowsOf(reading, query.customer, query.limit + 1, before && [String(before[0]), String(before[1])]);
+  return pageOf(
+    rows,
+    query.limit,
+    ({ createdAt, id }) => [createdAt, id],
+    (row) => row,
+  );
+}
+
+async function refuseKnown(work: Work, customerId: string, purchaseOrder: string): Promise<void> {
+  const known = await selectOne<{ number: string }>(
+    work,
+    'SELECT number FROM orders WHERE customer_id = ? AND purchase_order = ?',
+    [customerId, purchaseOrder],
+  );
+  if (known)
+    throw new Problem('already-exists', `This purchase order is already entered as ${known.number}.`, [
+      { path: 'purchaseOrder', message: `is already entered as ${known.number}` },
+    ]);
 }
 
 /** Enters a purchase order; lines are numbered 10, 20, … */
@@ -29,6 +49,7 @@ export async function createOrder(work: Work, body: BodyOf<typeof contract>): Pr
   }
   if (errors.length > 0 || !customer)
     throw new Problem('invalid-input', errors.map(({ path, message }) => `${path}: ${message}`).join('; '), errors);
+  await refuseKnown(work, customer.id, body.purchaseOrder);
   const id = newId();
   const number = await nextNumber(work, 'O');
   await execute(work, 'INSERT INTO orders (id, number, customer_id, purchase_order, created_at) VALUES (?, ?, ?, ?, ?)', [
@@ -45,7 +66,7 @@ export async function createOrder(work: Work, body: BodyOf<typeof contract>): Pr
       [newId(), id, (at + 1) * 10, revisions[at], line.quantity, line.dueOn ?? null, JSON.stringify(line.clauses)],
     );
   }
-  const [answer] = await ordersWithLines(work, id);
+  const answer = await orderById(work, id);
   if (!answer) throw new Error('the order just written is not there');
   return {
     answer,

@@ -1,7 +1,8 @@
 import { newId } from '@/db/identity';
 import { takeRows } from '@/db/lock';
 import { insert, insertAll } from '@/db/models/table';
-import { clusterByKey } from '@/db/repositories/lots';
+import { clusterByKey, lotsAbove } from '@/db/repositories/lots';
+import { holdsOver } from '@/db/repositories/part-story';
 import { partRequirements, parts } from '@/db/repositories/parts';
 import { planById, requirementsOfPlan } from '@/db/repositories/plans';
 import { select, selectOne, type Work } from '@/db/work';
@@ -51,6 +52,27 @@ async function place(work: Work, asked: readonly Asked[], drawingId: string): Pr
   return placed;
 }
 
+/**
+ * Takes the clusters and every lot above them, so that a hold placed at the same instant is either seen here or finds
+ * the new parts, and answers which clusters a hold reaches.
+ */
+async function takeClusters(work: Work, keys: readonly string[]): Promise<Set<string>> {
+  const above = new Map<string, string[]>();
+  for (const key of keys) {
+    const cluster = await clusterByKey(work, key);
+    if (!cluster) continue;
+    const lots = await lotsAbove(work, cluster.id);
+    above.set(
+      cluster.id,
+      lots.map(({ id }) => id),
+    );
+  }
+  await takeRows(work, 'lots', [...above.values()].flat());
+  const held = new Set<string>();
+  for (const [clusterId, lotIds] of above) if ((await holdsOver(work, clusterId, lotIds)).length > 0) held.add(clusterId);
+  return held;
+}
+
 /** Gives serials to positions of clusters (cut-off); each part starts with its plan's whole route open. */
 export async function createParts(work: Work, body: BodyOf<typeof contract>): Promise<Recorded<AnswerOf<typeof contract>>> {
   const plan = await planById(work, body.plan);
@@ -66,8 +88,7 @@ export async function createParts(work: Work, body: BodyOf<typeof contract>): Pr
   if (!drawing) throw new Error('an approved plan has no drawing');
   const route = await requirementsOfPlan(work, plan.id);
   const keys = [...new Set(body.parts.map(({ cluster }) => cluster))];
-  const clusterIds = (await Promise.all(keys.map((key) => clusterByKey(work, key)))).flatMap((one) => (one ? [one.id] : []));
-  await takeRows(work, 'lots', clusterIds);
+  const heldClusters = await takeClusters(work, keys);
   const placed = await place(work, body.parts, drawing.id);
   const made: { id: string; serial: string; clusterId: string; position: string }[] = [];
   for (const { serial, clusterId, position } of placed) {
@@ -81,7 +102,7 @@ export async function createParts(work: Work, body: BodyOf<typeof contract>): Pr
       clusterId,
       position,
       state: 'serialised',
-      held: false,
+      held: heldClusters.has(clusterId),
       metCount: 0,
       requirementCount: route.length,
       nextRequirement: route[0]?.title ?? null,
@@ -105,10 +126,10 @@ export async function createParts(work: Work, body: BodyOf<typeof contract>): Pr
     );
     made.push({ id, serial, clusterId, position });
   }
-  const ids = new Set(made.map(({ id }) => id));
-  const answer = await pageOfParts(work, {}, { sort: 'newest', limit: made.length, after: undefined });
+  const ids = made.map(({ id }) => id);
+  const { items } = await pageOfParts(work, { ids }, { sort: 'serial', limit: ids.length, after: undefined });
   return {
-    answer: { items: answer.items.filter(({ id }) => ids.has(id)).reverse(), next: null },
+    answer: { items: ids.flatMap((id) => items.find((one) => one.id === id) ?? []), next: null },
     events: made.map(({ id, serial, clusterId, position }) => ({
       subject: { kind: 'part', id },
       also: [{ kind: 'lot', id: clusterId }],

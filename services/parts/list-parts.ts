@@ -1,4 +1,4 @@
-import { listParts as rowsOf, type PartsFilter } from '@/db/repositories/parts-list';
+import { listParts as rowsOf, type PartsFilter, type PartsOrder } from '@/db/repositories/parts-list';
 import { requirementsOfParts, type PartRequirement, type PartSummary as PartRow } from '@/db/repositories/parts';
 import type { Reading } from '@/db/work';
 import type { AnswerOf, QueryOf } from '@/services/contracts/operation';
@@ -31,7 +31,7 @@ export function summaryOf(row: PartRow, requirements: readonly PartRequirement[]
 export async function pageOfParts(
   reading: Reading,
   filter: PartsFilter,
-  order: { readonly sort: 'serial' | 'newest'; readonly limit: number; readonly after: string | undefined },
+  order: { readonly sort: PartsOrder; readonly limit: number; readonly after: string | undefined },
 ): Promise<AnswerOf<typeof contract>> {
   const after = partsOfKey(order.after, 2);
   const rows = await rowsOf(reading, filter, order.sort, order.limit + 1, after && [String(after[0]), String(after[1])]);

@@ -13,6 +13,7 @@ import {
 import type { Reading } from '@/db/work';
 import type { GateReason } from '@/services/contracts/shipments';
 import { metStates } from '@/services/parts/recount-part';
+import { reasonsOfActs } from './act-gates';
 
 /** What one serial brings to the gates, and what stands against it. */
 export interface GatedPart {
@@ -29,6 +30,7 @@ interface Facts {
   readonly deciders: readonly { partId: string; decidedBy: string }[];
   readonly suspects: readonly { partId: string; equipment: string; inspection: string }[];
   readonly files: readonly { partId: string; name: string }[];
+  readonly acts: ReadonlyMap<string, readonly GateReason[]>;
 }
 
 const reason = (gate: number, code: string, message: string, who: string): GateReason => ({ gate, code, message, who });
@@ -121,6 +123,7 @@ async function gatesOf(
       .map(({ equipment, inspection }) =>
         reason(2, 'suspect', `${equipment} was found out of tolerance after inspection ${inspection}`, 'reviewer'),
       ),
+    ...(facts.acts.get(part.id) ?? []),
     ...(plan && plan.state !== 'approved' && plan.state !== 'superseded'
       ? [reason(5, 'plan-not-effective', `plan issue ${String(plan.issue)} is ${plan.state}`, 'reviewer')]
       : []),
@@ -154,9 +157,8 @@ export function shipmentReasons(shipment: ShipmentRow, count: number): GateReaso
 }
 
 /**
- * The release gates of every serial, with all reasons at once. Gates 3, 4 and 6 (people, equipment, checks at the time
- * of the act) are asked when an inspection is signed: a record cannot exist without them. Inside the signing
- * transaction call it after the parts' rows were taken; `signatoryId` null shows the gates without segregation.
+ * The release gates of every serial, with all reasons at once. Inside the signing transaction call it after the parts'
+ * rows were taken; `signatoryId` null shows the gates without segregation.
  */
 export async function gatesOfParts(
   reading: Reading,
@@ -170,6 +172,7 @@ export async function gatesOfParts(
     deciders: await decidersOfParts(reading, partIds),
     suspects: await suspectEquipment(reading, partIds),
     files: await badEvidence(reading, partIds),
+    acts: await reasonsOfActs(reading, partIds),
   };
   const gated: GatedPart[] = [];
   for (const partId of partIds) {

@@ -3,6 +3,7 @@ import { thePlant } from '@/db/repositories/plants';
 import type { ShipmentRow } from '@/db/repositories/shipments';
 import { selectOne, type Work } from '@/db/work';
 import type { Actor } from '@/services/contracts/actor';
+import { environment } from '@/services/environment';
 import { certificateSentences } from '@/services/pdf/certificate-words';
 import { certificateRecord, type CertificateRecord, type CertificateSerial } from '@/services/pdf/certificate-record';
 import type { GatedPart } from './gates';
@@ -67,7 +68,6 @@ export async function buildReleaseRecord(
     [shipment.customerId],
   );
   const locale = customer?.locale ?? 'en';
-  const base = process.env.RINGTRUE_BASE_URL ?? 'http://127.0.0.1:3000';
   return certificateRecord.parse({
     kind: 'certificate-of-conformance',
     schemaVersion: 1,
@@ -93,7 +93,7 @@ export async function buildReleaseRecord(
       signedAt: work.now,
     },
     place: lines(plant.address)[1] ?? plant.name,
-    verifyUrl: `${base}/verify?number=${number}&check=${checkCode}`,
+    verifyUrl: `${environment().RINGTRUE_BASE_URL}/verify?number=${number}&check=${checkCode}`,
     timeStamp: 'none',
     clauses: [],
   });

@@ -1,8 +1,9 @@
 import { createHash } from 'node:crypto';
 import { newId, nextNumber } from '@/db/identity';
 import { takeRows } from '@/db/lock';
+import { lotsOverParts } from '@/db/repositories/releases';
 import { partIdsOfShipment, shipmentByNumber, type ShipmentRow } from '@/db/repositories/shipments';
-import { execute, select, sqlTimeOf, type Work } from '@/db/work';
+import { execute, sqlTimeOf, type Work } from '@/db/work';
 import type { Actor } from '@/services/contracts/actor';
 import type { AnswerOf } from '@/services/contracts/operation';
 import { releaseSentence } from '@/services/contracts/release-sentence';
@@ -16,22 +17,18 @@ import { buildReleaseRecord, newCheckCode } from './release-record';
 
 type By = Work & { readonly actor: Actor };
 
-/** Parts first, in id order; then their lots; then the shipment and the order line: the order every decision keeps. */
+/** Parts first, in id order; then every lot above them; then the shipment and the order line: the order every decision keeps. */
 async function takeAll(work: By, shipment: ShipmentRow): Promise<string[]> {
   const partIds = await partIdsOfShipment(work, shipment.id);
   await takeRows(work, 'parts', partIds);
-  const lots =
-    partIds.length === 0
-      ? []
-      : await select<{ id: string }>(work, 'SELECT DISTINCT cluster_id AS id FROM parts WHERE id IN (?)', [partIds]);
-  await takeRows(
-    work,
-    'lots',
-    lots.map(({ id }) => id),
-  );
+  await takeRows(work, 'lots', await lotsOverParts(work, partIds));
   await takeRows(work, 'shipments', [shipment.id]);
   await takeRows(work, 'order_lines', [shipment.lineId]);
-  return partIdsOfShipment(work, shipment.id);
+  const now = await partIdsOfShipment(work, shipment.id);
+  // A serial that came in between was not taken: nothing is decided on it.
+  if (now.some((partId) => !partIds.includes(partId)))
+    throw new Problem('state-refused', `Shipment ${shipment.number} was changed at this moment. Look at it again, then sign.`);
+  return now;
 }
 
 function refuseClosedGates(shipment: ShipmentRow, gated: readonly GatedPart[]): void {
@@ -80,8 +77,8 @@ async function store(work: By, shipment: ShipmentRow, gated: readonly GatedPart[
   await execute(work, `UPDATE parts SET state = 'released' WHERE id IN (?)`, [gated.map(({ part }) => part.id)]);
   await execute(work, 'UPDATE order_lines SET released = released + ? WHERE id = ?', [gated.length, shipment.lineId]);
   await execute(work, `UPDATE shipments SET state = 'packed' WHERE id = ?`, [shipment.id]);
-  await enqueue(work, 'issue-certificate', { releaseId }, `issue-${releaseId}`);
-  return { releaseId, certificateId, number, digest };
+  const job = await enqueue(work, 'issue-certificate', { releaseId }, `issue-${releaseId}`);
+  return { certificateId, number, digest, job };
 }
 
 /**
@@ -114,7 +111,7 @@ export async function signRelease(work: By, shipmentNumber: string): Promise<Rec
   const stored = await store(work, shipment, gated, sentence);
   const serials = gated.map(({ part }) => part.serial);
   return {
-    answer: { certificate: stored.number, state: 'signed', serials, sentence },
+    answer: { certificate: stored.number, state: 'signed', job: stored.job, serials, sentence },
     headers: { location: `/api/certificates/${stored.number}` },
     events: [
       {

@@ -1,6 +1,6 @@
 import { newId, nextNumber } from '@/db/identity';
 import { takeRows } from '@/db/lock';
-import { shipmentByNumber, type ShipmentRow } from '@/db/repositories/shipments';
+import { partIdsOfShipment, shipmentByNumber, type ShipmentRow } from '@/db/repositories/shipments';
 import { execute, select, selectOne, sqlTimeOf, type Work } from '@/db/work';
 import type { Actor } from '@/services/contracts/actor';
 import type { BodyOf } from '@/services/contracts/operation';
@@ -33,14 +33,20 @@ async function partsBySerial(work: Work, drawingId: string, serials: readonly st
   return rows;
 }
 
-async function addParts(work: By, shipment: { readonly id: string }, parts: readonly Found[], path: string): Promise<void> {
+/** Puts parts into a shipment. `path` names the field a part came from; problem state-refused when one is in another shipment. */
+async function addParts(
+  work: By,
+  shipment: { readonly id: string },
+  parts: readonly Found[],
+  path: (part: Found) => string,
+): Promise<void> {
   await takeRows(
     work,
     'parts',
     parts.map(({ id }) => id),
   );
   const errors: FieldError[] = [];
-  for (const [at, part] of parts.entries()) {
+  for (const part of parts) {
     const elsewhere = await selectOne<{ number: string; id: string }>(
       work,
       'SELECT s.number, s.id FROM shipment_parts sp JOIN shipments s ON s.id = sp.shipment_id WHERE sp.part_id = ? AND sp.release_cycle = ?',
@@ -48,7 +54,7 @@ async function addParts(work: By, shipment: { readonly id: string }, parts: read
     );
     if (elsewhere) {
       if (elsewhere.id !== shipment.id)
-        errors.push({ path: `${path}.${String(at)}`, message: `${part.serial} is in shipment ${elsewhere.number}` });
+        errors.push({ path: path(part), message: `${part.serial} is in shipment ${elsewhere.number}` });
       continue;
     }
     await execute(
@@ -92,7 +98,10 @@ export async function createShipment(work: By, body: BodyOf<typeof createContrac
     sqlTimeOf(work.now),
   ]);
   const parts = [...new Map([...bySerial, ...byId].map((part) => [part.id, part])).values()];
-  await addParts(work, shipment, parts, 'serials');
+  await addParts(work, shipment, parts, (part) => {
+    const place = body.serials?.indexOf(part.serial) ?? -1;
+    return place >= 0 ? `serials.${String(place)}` : `parts.${String(body.parts?.indexOf(part.id) ?? 0)}`;
+  });
   return {
     answer: await readShipment(work, number),
     events: [
@@ -115,6 +124,17 @@ async function openShipment(work: By, number: string): Promise<ShipmentRow> {
   return row;
 }
 
+async function refuseAbsent(work: Work, shipmentId: string, parts: readonly Found[], asked: readonly string[]): Promise<void> {
+  const inside = new Set(await partIdsOfShipment(work, shipmentId));
+  const errors = parts
+    .filter(({ id }) => !inside.has(id))
+    .map(({ serial }) => ({
+      path: `remove.${String(asked.indexOf(serial))}`,
+      message: `${serial} is not in this shipment`,
+    }));
+  if (errors.length > 0) throw new Problem('invalid-input', errors.map(({ message }) => message).join('; '), errors);
+}
+
 /** Adds serials to an open shipment and takes serials off it. */
 export async function changeParts(
   work: By,
@@ -123,6 +143,10 @@ export async function changeParts(
 ): Promise<Recorded<Shipment>> {
   const before = await shipmentByNumber(work, number);
   if (!before) throw notFound(`Shipment ${number}`);
+  if (!body.add && !body.remove)
+    throw new Problem('invalid-input', 'add or remove: name at least one serial', [
+      { path: 'add', message: 'name at least one serial to add or to remove' },
+    ]);
   const added = await partsBySerial(work, before.drawingId, body.add ?? [], 'add');
   const removed = await partsBySerial(work, before.drawingId, body.remove ?? [], 'remove');
   await takeRows(
@@ -131,12 +155,13 @@ export async function changeParts(
     [...added, ...removed].map(({ id }) => id),
   );
   const shipment = await openShipment(work, number);
+  await refuseAbsent(work, shipment.id, removed, body.remove ?? []);
   if (removed.length > 0)
     await execute(work, 'DELETE FROM shipment_parts WHERE shipment_id = ? AND part_id IN (?)', [
       shipment.id,
       removed.map(({ id }) => id),
     ]);
-  await addParts(work, shipment, added, 'add');
+  await addParts(work, shipment, added, ({ serial }) => `add.${String(body.add?.indexOf(serial) ?? 0)}`);
   return {
     answer: await readShipment(work, number),
     events: [

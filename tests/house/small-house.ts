@@ -16,6 +16,12 @@ const configuration = [
   'next.config.js',
 ];
 
+/** The environment of a tool whose words are read: coloured nowhere, not even where a builder's `CI` asks for it. */
+function plainText(): NodeJS.ProcessEnv {
+  const { CI: _ci, FORCE_COLOR: _colour, ...rest } = process.env;
+  return { ...rest, NO_COLOR: '1' };
+}
+
 /** An empty house with the real configuration of every tool, into which a test puts files that break a rule. */
 export interface SmallHouse {
   readonly folder: string;
@@ -41,7 +47,7 @@ export function buildSmallHouse(): SmallHouse {
     },
     run: (program, args) => {
       const script = program.endsWith('.mjs') ? [path.join(root, program)] : [path.join(root, 'node_modules', '.bin', program)];
-      const ended = spawnSync(process.execPath, [...script, ...args], { cwd: folder, encoding: 'utf8' });
+      const ended = spawnSync(process.execPath, [...script, ...args], { cwd: folder, encoding: 'utf8', env: plainText() });
       return { code: ended.status, output: `${ended.stdout}${ended.stderr}` };
     },
     remove: () => rmSync(folder, { recursive: true, force: true }),

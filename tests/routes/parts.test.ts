@@ -8,7 +8,7 @@ import { POST as lift } from '@/app/api/holds/[id]/lift/route';
 import { GET as readPart } from '@/app/api/parts/[id]/route';
 import { GET as list, POST as create } from '@/app/api/parts/route';
 import { GET as trace } from '@/app/api/trace/[partId]/route';
-import { hold as holdShape, lot as lotShape, part as partShape } from '@/services/contracts/parts';
+import { hold as holdShape, lot as lotShape, lotStory as lotStoryShape, part as partShape } from '@/services/contracts/parts';
 import { call, partOf, person, setting, signingPassword, type Person, type Setting } from './inspection-setting';
 
 let administrator: Person;
@@ -80,6 +80,65 @@ describe('parts', () => {
       after = page.next === null ? '' : `&after=${page.next}`;
     } while (after !== '');
     expect(seen).toEqual(serials);
+  });
+
+  it('pages backwards by serial as well', async () => {
+    const cluster = await madeLot('cluster');
+    const serials = Array.from({ length: 5 }, (_, place) => fresh(`B${String(place)}`)).sort();
+    const made = await call(create, {
+      method: 'POST',
+      as: administrator,
+      body: {
+        plan: plan.planId,
+        parts: serials.map((serial, place) => ({ serial, cluster: cluster.id, position: String(place) })),
+      },
+    });
+    expect((made.json as { items: { serial: string }[] }).items.map(({ serial }) => serial)).toEqual(serials);
+    const seen: string[] = [];
+    let after = '';
+    do {
+      const query = `?cluster=${cluster.number}&sort=-serial&limit=2${after}`;
+      const page = (await call(list, { as: administrator, query })).json as { items: { serial: string }[]; next: string | null };
+      seen.push(...page.items.map(({ serial }) => serial));
+      after = page.next === null ? '' : `&after=${page.next}`;
+    } while (after !== '');
+    expect(seen).toEqual([...serials].reverse());
+  });
+
+  it('counts what is below a heat, and how far it has come', async () => {
+    const heat = await madeLot('heat');
+    const cluster = await madeLot('cluster', [heat.id]);
+    const body = {
+      plan: plan.planId,
+      parts: ['1', '2', '3'].map((position) => ({ serial: fresh('N'), cluster: cluster.id, position })),
+    };
+    await call(create, { method: 'POST', as: administrator, body });
+    const told = lotStoryShape.parse((await call(readLot, { as: administrator, params: { id: heat.id } })).json);
+    expect([told.partCount, told.progress]).toEqual([3, { open: 6 }]);
+  });
+
+  it.each(['inspector', 'auditor', 'customer-quality'] as const)('are not entered by the role %s', async (role) => {
+    const as = await person(role);
+    const body = { plan: plan.planId, parts: [{ serial: fresh('S'), cluster: 'C', position: '1' }] };
+    expect((await call(create, { method: 'POST', as, body })).status).toBe(403);
+    expect((await call(createLot, { method: 'POST', as, body: { kind: 'heat', number: fresh('H'), quantity: 1 } })).status).toBe(
+      403,
+    );
+  });
+
+  it('are hidden from strangers and customers', async () => {
+    const id = await partOf(plan, administrator);
+    const customer = await person('customer-quality', plan.customerId);
+    for (const [handler, params] of [
+      [list, {}],
+      [readPart, { id }],
+      [lots, {}],
+      [readLot, { id }],
+      [lotParts, { id }],
+    ] as const) {
+      expect((await call(handler, { params })).status).toBe(401);
+      expect((await call(handler, { params, as: customer })).status).toBe(403);
+    }
   });
 
   it('answers 404 for a part that does not exist and 422 for a key that is not ours', async () => {

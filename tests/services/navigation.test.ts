@@ -9,7 +9,18 @@ describe('the pages that a role is shown', () => {
   });
 
   it('shows an auditor what can be followed, and nothing that releases or judges', () => {
-    expect(paths('auditor')).toEqual(['/', '/parts', '/certificates', '/personnel', '/trace']);
+    expect(paths('auditor')).toEqual([
+      '/',
+      '/parts',
+      '/lots',
+      '/holds',
+      '/certificates',
+      '/personnel',
+      '/trace',
+      '/record',
+      '/orders',
+      '/customers',
+    ]);
   });
 
   it('keeps judgement with reviewers and people with the administrator', () => {

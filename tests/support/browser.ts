@@ -1,7 +1,9 @@
 import { mkdirSync, mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
+import axe from 'axe-core';
 import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core';
+import { expect } from 'vitest';
 import { testAddress } from './stack';
 
 export const demoPassword = 'sound-castings-ring-true';
@@ -68,6 +70,26 @@ export async function signIn(desk: Desk, email: string, password = demoPassword)
     .fill(password);
   await desk.page.getByRole('button', { name: /^(sign in|se connecter)$/i }).click();
   await desk.page.waitForURL((url) => !url.pathname.startsWith('/sign-in'));
+}
+
+/** What axe finds against WCAG 2.2 A and AA on the page as it stands. */
+export async function axeFindings(page: Page): Promise<string[]> {
+  await page.evaluate(axe.source);
+  return page.evaluate(async () => {
+    type Found = { violations: { id: string; nodes: { target: unknown[]; failureSummary?: string }[] }[] };
+    const { run } = (window as unknown as { axe: { run: (options: object) => Promise<Found> } }).axe;
+    const { violations } = await run({ runOnly: ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'] });
+    const line = (id: string, target: unknown[], summary = '') =>
+      `${id} at ${JSON.stringify(target)}: ${summary.replaceAll('\n', ' ')}`;
+    return violations.flatMap(({ id, nodes }) =>
+      nodes.slice(0, 3).map(({ target, failureSummary }) => line(id, target, failureSummary)),
+    );
+  });
+}
+
+/** Fails when the page's scripts complained. */
+export function expectNoFaults(desk: Desk): void {
+  expect(desk.faults).toEqual([]);
 }
 
 /** Keeps a picture of the page where a person can look at it when RINGTRUE_PICTURES names a folder. */

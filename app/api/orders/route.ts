@@ -2,7 +2,12 @@ import { createOrder as createContract, listOrders as listContract } from '@/ser
 import { route } from '@/services/http/route';
 import { createOrder, listOrders } from '@/services/orders/keep-orders';
 
-export const GET = route({ contract: listContract, who: 'see-orders', event: null, call: (reading) => listOrders(reading) });
+export const GET = route({
+  contract: listContract,
+  who: 'see-orders',
+  event: null,
+  call: (reading, { query }) => listOrders(reading, query),
+});
 
 export const POST = route({
   contract: createContract,
