@@ -4,6 +4,8 @@ const config = {
   poweredByHeader: false,
   reactStrictMode: true,
   agentRules: false,
+  // The address that the starter prints; without it the development server keeps its updates to itself.
+  allowedDevOrigins: ['127.0.0.1'],
   // Types, tests included, are a step of their own in the test run.
   typescript: { ignoreBuildErrors: true },
   outputFileTracingIncludes: { '/*': ['./services/pdf/fonts/**'] },

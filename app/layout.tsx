@@ -4,10 +4,10 @@ import { palettes } from '@/components/theme/palettes';
 import { requestWorkstation } from '@/components/theme/request-workstation';
 import { monoFace, textFace } from '@/components/theme/typefaces';
 import { WorkstationProvider } from '@/components/theme/workstation';
+import { TitleKeeper } from '@/components/ui/page-title';
 import './globals.css';
 
 export const metadata: Metadata = {
-  title: { default: 'Ringtrue', template: '%s · Ringtrue' },
   icons: { icon: '/icon.svg' },
   robots: { index: false, follow: false },
 };
@@ -28,7 +28,9 @@ export default async function RootLayout({ children }: { children: ReactNode }) 
       suppressHydrationWarning
     >
       <body>
-        <WorkstationProvider {...workstation}>{children}</WorkstationProvider>
+        <WorkstationProvider {...workstation}>
+          <TitleKeeper>{children}</TitleKeeper>
+        </WorkstationProvider>
       </body>
     </html>
   );

@@ -1,12 +1,11 @@
-import { redirect } from 'next/navigation';
 import type { ReactNode } from 'react';
 import { Shell } from '@/components/shell/shell';
-import { currentActor } from '@/services/accounts/page-actor';
+import { askToSignIn, currentActor } from '@/services/accounts/page-actor';
 import { pagePlant } from '@/services/accounts/page-plant';
 
 export default async function PlantLayout({ children }: { children: ReactNode }) {
   const actor = await currentActor();
-  if (!actor) redirect('/sign-in');
+  if (!actor) return askToSignIn();
   const plant = await pagePlant();
   return (
     <Shell

@@ -73,7 +73,13 @@ export function ProblemForm<Values extends FormikValues>({
   return (
     <FormikProvider value={formik}>
       <ProblemContext.Provider value={{ problem, values: formik.values }}>
-        <form noValidate aria-label={label} onSubmit={formik.handleSubmit} className={className ?? 'flex flex-col gap-4'}>
+        <form
+          method="post"
+          noValidate
+          aria-label={label}
+          onSubmit={formik.handleSubmit}
+          className={className ?? 'flex flex-col gap-4'}
+        >
           {children}
         </form>
       </ProblemContext.Provider>

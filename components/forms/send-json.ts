@@ -22,6 +22,17 @@ async function bodyOf(response: Response): Promise<unknown> {
   }
 }
 
+/** What a call answered. Throws ProblemError with the server's problem details when it refused. */
+export async function answerOf<Answer>(response: Response): Promise<Answer> {
+  const answer = await bodyOf(response);
+  if (response.ok) return answer as Answer;
+  throw new ProblemError(
+    isProblem(answer)
+      ? answer
+      : { type: 'about:blank', title: response.statusText || String(response.status), status: response.status },
+  );
+}
+
 /** Calls our API with JSON. Throws ProblemError with the server's problem details, TypeError when nothing answered. */
 export async function sendJson<Answer = unknown>(
   url: string,
@@ -33,11 +44,5 @@ export async function sendJson<Answer = unknown>(
     headers: { accept: 'application/json', ...(body === undefined ? {} : { 'content-type': 'application/json' }), ...headers },
     body: body === undefined ? null : JSON.stringify(body),
   });
-  const answer = await bodyOf(response);
-  if (response.ok) return answer as Answer;
-  throw new ProblemError(
-    isProblem(answer)
-      ? answer
-      : { type: 'about:blank', title: response.statusText || String(response.status), status: response.status },
-  );
+  return answerOf<Answer>(response);
 }

@@ -3,6 +3,7 @@
 import Link from 'next/link';
 import { useMessages } from '@/components/theme/use-messages';
 import { Caution } from '@/components/ui/caution';
+import { PageTitle } from '@/components/ui/page-title';
 import { Ring } from '@/components/ui/ring';
 import { StateWord } from '@/components/ui/state-word';
 import { When } from '@/components/ui/when';
@@ -23,6 +24,7 @@ export function BenchHead({ answer, me }: { answer: InspectionAnswer; me: { read
   const { part, requirement, technique, plan } = answer;
   return (
     <header className="flex flex-wrap items-center gap-x-5 gap-y-0.5 border-b border-line-strong bg-raised px-3 py-1.5">
+      <PageTitle title={`${part.serial} ${requirement.operation} ${requirement.title}`} />
       <Ring segments={part.ring} held={part.held} size="small" pixels={32} />
       <h1 className="text-xl font-bold">
         <Link href={`/parts/${part.id}`} className="font-mono underline-offset-4 hover:underline">

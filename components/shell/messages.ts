@@ -23,6 +23,13 @@ export const messages = defineMessages({
       row: 'open the row; with Ctrl beside this page',
       arrows: 'move in tables and tabs',
     },
+    missing: 'There is nothing here',
+    missingHint: 'The address is wrong, or what it names is not for you. What you may see is in the list of pages.',
+    broken: 'This page did not work',
+    brokenHint:
+      'What was saved is safe. The database or the file store may not be answering. Try again; if it stays, tell your administrator this number: {number}.',
+    again: 'Try again',
+    toToday: 'Go to today',
     releaseAuthority: 'release authority',
     palettes: { floor: 'Floor', 'reading-room': 'Reading room', booth: 'Booth' },
     paletteHints: {
@@ -93,6 +100,13 @@ export const messages = defineMessages({
       row: 'ouvrir la ligne ; avec Ctrl, à côté de cette page',
       arrows: 'se déplacer dans les tableaux et onglets',
     },
+    missing: 'Il n’y a rien ici',
+    missingHint: 'L’adresse est fausse, ou ce qu’elle désigne ne vous est pas ouvert. Vos pages sont dans la liste.',
+    broken: 'Cette page n’a pas fonctionné',
+    brokenHint:
+      'Ce qui était enregistré est en sécurité. La base de données ou le magasin de fichiers ne répond peut-être pas. Réessayez ; si cela dure, donnez ce numéro à votre administrateur : {number}.',
+    again: 'Réessayer',
+    toToday: 'Aller à aujourd’hui',
     releaseAuthority: 'autorité de libération',
     palettes: { floor: 'Atelier', 'reading-room': 'Salle de lecture', booth: 'Cabine' },
     paletteHints: {

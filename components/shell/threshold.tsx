@@ -2,6 +2,7 @@
 
 import type { ReactNode } from 'react';
 import { useMessages } from '@/components/theme/use-messages';
+import { PageTitle } from '@/components/ui/page-title';
 import { labelPoint, largeProfile, ringShapes } from '@/components/ui/ring-geometry';
 
 const ticks = Array.from({ length: 120 }, (_, index) => index * 3);
@@ -37,6 +38,7 @@ export function Threshold({ title, children }: ThresholdProps) {
         <p className="max-w-sm text-center text-lg text-ink-soft text-balance">{t('saying')}</p>
       </div>
       <section className="rounded border border-line-strong bg-raised p-6">
+        <PageTitle title={title} />
         <h1 className="text-2xl font-bold">{title}</h1>
         <div aria-hidden className="graduated mt-2 mb-5" />
         {children}

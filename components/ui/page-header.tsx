@@ -1,4 +1,5 @@
 import type { ReactNode } from 'react';
+import { PageTitle } from './page-title';
 
 export interface PageHeaderProps {
   title: ReactNode;
@@ -14,6 +15,7 @@ export interface PageHeaderProps {
 export function PageHeader({ title, code, subtitle, ring, actions }: PageHeaderProps) {
   return (
     <header className="mb-5">
+      {typeof title === 'string' ? <PageTitle title={code === undefined ? title : `${title} ${code}`} /> : null}
       <div className="flex flex-wrap items-end justify-between gap-x-6 gap-y-3 pb-3">
         <div className="flex min-w-0 items-center gap-4">
           {ring}

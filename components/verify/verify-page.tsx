@@ -1,7 +1,7 @@
 'use client';
 
 import { useState } from 'react';
-import { sendJson } from '@/components/forms/send-json';
+import { answerOf, sendJson } from '@/components/forms/send-json';
 import { useMessages } from '@/components/theme/use-messages';
 import { Button } from '@/components/ui/button';
 import { Notice, ProblemNotice } from '@/components/ui/notice';
@@ -27,8 +27,7 @@ async function digestOf(file: File): Promise<string> {
 async function judge(file: File): Promise<VerifyAnswer> {
   const known = await sendJson<VerifyAnswer>('/api/verify', { body: { sha256: await digestOf(file) } });
   if (known.state !== 'unknown') return known;
-  const answer = await fetch('/api/verify', { method: 'POST', headers: { 'content-type': 'application/pdf' }, body: file });
-  return (await answer.json()) as VerifyAnswer;
+  return answerOf(await fetch('/api/verify', { method: 'POST', headers: { 'content-type': 'application/pdf' }, body: file }));
 }
 
 /** The public page: valid, withdrawn, altered or unknown, and nothing more than the paper says. */
@@ -40,6 +39,7 @@ export function VerifyPage({ number: given, check: code }: { number: string; che
   const [problem, setProblem] = useState<Problem>();
   const run = (ask: () => Promise<VerifyAnswer>) => {
     setProblem(undefined);
+    setAnswer(undefined);
     ask()
       .then(setAnswer)
       .catch((failure: unknown) => setProblem(problemOf(failure)));

@@ -1,7 +1,17 @@
 import type { Browser } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { axeFindings, expectNoFaults, openBrowser, openDesk, picture, signIn, type PaletteName } from '../support/browser';
+import {
+  axeFindings,
+  expectNoFaults,
+  openBrowser,
+  openDesk,
+  picture,
+  signIn,
+  type Desk,
+  type PaletteName,
+} from '../support/browser';
 import { testAddress } from '../support/stack';
+import { pagesOfTheProduct, visits } from './page-visits';
 
 let browser: Browser;
 
@@ -13,55 +23,61 @@ afterAll(async () => {
   await browser.close();
 });
 
-const visits: readonly { readonly email: string | null; readonly paths: readonly string[] }[] = [
-  { email: null, paths: ['/sign-in', '/verify'] },
-  { email: 'inspector@aldermoor.example', paths: ['/', '/parts', '/trace'] },
-  { email: 'reviewer@aldermoor.example', paths: ['/review', '/shipments'] },
-  { email: 'quality@tarnside.example', paths: ['/', '/certificates'] },
-];
+const readers = [...new Set(Object.values(visits).map(({ email }) => email))];
 
-/** From a list to the first thing in it: the pages of one part, finding, shipment and certificate. */
-const details: readonly { readonly email: string; readonly list: string; readonly link: RegExp; readonly ready: string }[] = [
-  { email: 'reviewer@aldermoor.example', list: '/review', link: /^F-/, ready: 'Decisions' },
-  { email: 'reviewer@aldermoor.example', list: '/shipments', link: /^S-/, ready: 'Release gates' },
-  { email: 'quality@tarnside.example', list: '/certificates', link: /^C-/, ready: 'Serials' },
-];
+async function look(desk: Desk, address: string, name: string): Promise<void> {
+  await desk.page.goto(`${testAddress()}${address}`, { waitUntil: 'networkidle' });
+  await desk.page.getByRole('heading', { level: 1 }).first().waitFor();
+  expect([address, await axeFindings(desk.page)]).toEqual([address, []]);
+  expect(await desk.page.title()).toMatch(/.+ · Ringtrue$/);
+  // A page wider than the screen hides what a gloved hand will not scroll to.
+  const overflow = await desk.page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
+  expect([address, 'wider than the screen by', Math.max(0, overflow)]).toEqual([address, 'wider than the screen by', 0]);
+  await picture(desk.page, name);
+}
 
-describe.each(['floor', 'reading-room', 'booth'] as const satisfies readonly PaletteName[])('in the %s palette', (palette) => {
-  it.each(visits)('axe finds nothing on $paths', { timeout: 90_000 }, async ({ email, paths }) => {
-    const desk = await openDesk(browser, { palette });
-    if (email !== null) await signIn(desk, email);
-    for (const path of paths) {
-      await desk.page.goto(`${testAddress()}${path}`, { waitUntil: 'networkidle' });
-      await desk.page.getByRole('heading', { level: 1 }).waitFor();
-      expect([path, await axeFindings(desk.page)]).toEqual([path, []]);
-      await picture(desk.page, `${palette}${path.replaceAll('/', '-')}`);
-    }
-    expectNoFaults(desk);
-    await desk.context.close();
+describe('every page', () => {
+  it('is visited here', () => {
+    expect(Object.keys(visits).sort()).toEqual(pagesOfTheProduct());
   });
 
-  it.each(details)('axe finds nothing on what $list leads to', { timeout: 90_000 }, async ({ email, list, link, ready }) => {
-    const desk = await openDesk(browser, { palette });
-    await signIn(desk, email);
-    await desk.page.goto(`${testAddress()}${list}`, { waitUntil: 'networkidle' });
-    await desk.page.getByRole('link', { name: link }).first().click();
-    await desk.page.getByRole('heading', { name: ready }).waitFor();
-    expect(await axeFindings(desk.page)).toEqual([]);
-    await picture(desk.page, `${palette}${list.replaceAll('/', '-')}-one`);
-    await desk.context.close();
+  describe.each(['floor', 'reading-room', 'booth'] as const satisfies readonly PaletteName[])('in the %s palette', (palette) => {
+    it.each(readers)('has nothing that axe finds, for %s', { timeout: 180_000 }, async (email) => {
+      const desk = await openDesk(browser, { palette });
+      if (email !== null) await signIn(desk, email);
+      for (const [pattern, visit] of Object.entries(visits).filter(([, one]) => one.email === email)) {
+        const addresses = visit.find === undefined ? [pattern] : await visit.find(desk.page);
+        expect([pattern, addresses.length]).not.toEqual([pattern, 0]);
+        for (const [place, address] of addresses.entries())
+          await look(desk, address, `${palette}${pattern.replaceAll(/[/[\]]+/g, '-')}${String(place)}`);
+      }
+      expectNoFaults(desk);
+      await desk.context.close();
+    });
   });
 });
 
 describe('who may see what', () => {
-  it('leads a stranger to sign-in and hides what is not for a role', async () => {
+  it('leads a stranger to sign-in, and back to what was asked for', async () => {
     const stranger = await openDesk(browser);
-    await stranger.page.goto(`${testAddress()}/parts`);
-    await stranger.page.waitForURL(/\/sign-in/);
+    await stranger.page.goto(`${testAddress()}/parts?serial=T104`);
+    await stranger.page.waitForURL(/\/sign-in\?next=%2Fparts%3Fserial%3DT104$/);
+    await stranger.page.getByLabel('E-mail').fill('inspector@aldermoor.example');
+    await stranger.page.getByLabel('Password').first().fill('sound-castings-ring-true');
+    await stranger.page.getByRole('button', { name: 'Sign in' }).click();
+    await stranger.page.waitForURL(/\/parts\?serial=T104$/);
+    await stranger.context.close();
+  });
+
+  it('hides what is not for a role, and says so in words', async () => {
     const customer = await openDesk(browser);
     await signIn(customer, 'quality@tarnside.example');
-    const answer = await customer.page.goto(`${testAddress()}/parts`);
-    expect(answer?.status()).toBe(404);
+    for (const address of ['/parts', '/no-such-page']) {
+      const answer = await customer.page.goto(`${testAddress()}${address}`);
+      expect(answer?.status()).toBe(404);
+      await customer.page.getByRole('heading', { level: 1, name: 'There is nothing here' }).waitFor();
+    }
+    await customer.context.close();
   });
 
   it('speaks French where the browser asks for it', async () => {
@@ -69,5 +85,6 @@ describe('who may see what', () => {
     await desk.page.goto(`${testAddress()}/sign-in`);
     await desk.page.getByRole('button', { name: 'Se connecter' }).waitFor();
     expect(await desk.page.locator('html').getAttribute('lang')).toBe('fr');
+    await desk.context.close();
   });
 });
