@@ -41,7 +41,7 @@ function migrator(owner: Sequelize) {
  * (GET_LOCK on one pinned connection, hence the pool of one). Returns the names applied now.
  */
 export async function migrate(ownerAddress: string, applicationAddress: string): Promise<string[]> {
-  const owner = connect(ownerAddress, 1);
+  const owner = connect(ownerAddress, 1, 0);
   try {
     const [lock] = await owner.query<{ got: number | null }>(`SELECT GET_LOCK('ringtrue-migrate', 60) AS got`, {
       type: QueryTypes.SELECT,

@@ -156,6 +156,8 @@ export const english = {
   faults: '{count, plural, one {1 entry cannot be judged} other {# entries cannot be judged}}',
   noNetwork: 'the server cannot be reached; your entries are kept in this browser',
   retrying: 'It is tried again by itself.',
+  sessionEnded: 'your session has ended; what you entered is kept here.',
+  signInBeside: 'Sign in beside this page',
   unsaved: 'Not saved: {reason}',
   restored: 'Entries that had not reached the server were taken up again.',
   conflictText: 'Your entries are kept here and are not saved until you choose. {name} saved the other version:',

@@ -156,6 +156,8 @@ export const french = {
   faults: '{count, plural, one {1 saisie ne peut être jugée} other {# saisies ne peuvent être jugées}}',
   noNetwork: 'le serveur est injoignable ; vos saisies sont gardées dans ce navigateur',
   retrying: 'Un nouvel essai se fait de lui-même.',
+  sessionEnded: 'votre session est terminée ; vos saisies sont gardées ici.',
+  signInBeside: 'Se reconnecter à côté de cette page',
   unsaved: 'Non enregistré : {reason}',
   restored: 'Des saisies qui n’avaient pas atteint le serveur ont été reprises.',
   conflictText:

@@ -69,9 +69,10 @@ export function useDraft(
   useEffect(() => {
     const again = () => void keeper.flush();
     keeper.wake();
-    window.addEventListener('online', again);
+    // The network is back, or the person is: after signing in on another page, say.
+    for (const sign of ['online', 'focus'] as const) window.addEventListener(sign, again);
     return () => {
-      window.removeEventListener('online', again);
+      for (const sign of ['online', 'focus'] as const) window.removeEventListener(sign, again);
       keeper.rest();
     };
   }, [keeper]);

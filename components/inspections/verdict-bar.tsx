@@ -53,12 +53,24 @@ function Saved({ saved }: { saved: SavedState }) {
   }
   const { problem, retrying } = saved;
   const reason =
-    problem.type === noAnswerType ? t('noNetwork') : problem.status === 412 ? t('conflict') : (problem.detail ?? problem.title);
+    problem.type === noAnswerType
+      ? t('noNetwork')
+      : problem.status === 412
+        ? t('conflict')
+        : problem.status === 401
+          ? t('sessionEnded')
+          : (problem.detail ?? problem.title);
   return (
     <span data-saved="unsaved" role="alert" className="flex max-w-md items-start gap-2 text-sm text-reject">
       <Glyph name="caution" />
       <span>
-        {t('unsaved', { reason })} {retrying ? t('retrying') : null}
+        {t('unsaved', { reason })} {retrying ? t('retrying') : null}{' '}
+        {problem.status === 401 ? (
+          // Beside this page, so that what is entered here stays in sight.
+          <a href="/sign-in?next=/account" target="_blank" className="control font-semibold underline underline-offset-4">
+            {t('signInBeside')}
+          </a>
+        ) : null}
       </span>
     </span>
   );

@@ -40,6 +40,9 @@ export const messages = defineMessages({
     read: 'Inspection {number}',
     act: 'Inspection',
     operation: 'Op.',
+    comesNext: 'Comes next',
+    routeDone: 'Every requirement of the route is met.',
+    routeWaits: 'Nothing can be inspected until what is undecided has been decided.',
     none: 'None.',
   },
   fr: {
@@ -81,6 +84,9 @@ export const messages = defineMessages({
     read: 'Contrôle {number}',
     act: 'Contrôle',
     operation: 'Op.',
+    comesNext: 'Ensuite',
+    routeDone: 'Toutes les exigences de la gamme sont satisfaites.',
+    routeWaits: 'Rien ne peut être contrôlé avant décision.',
     none: 'Aucun.',
   },
 });

@@ -7,8 +7,16 @@ import { Button } from '@/components/ui/button';
 import { ProblemNotice } from '@/components/ui/notice';
 import { problemOf, type Problem } from '@/components/ui/problem';
 
+export interface OpenInspectionProps {
+  readonly part: string;
+  readonly requirement: string;
+  readonly label: string;
+  /** The one that comes next stands out, and fits a gloved finger. */
+  readonly next?: boolean;
+}
+
 /** Opens (or goes on with) the inspection of a requirement of a part. */
-export function OpenInspection({ part, requirement, label }: { part: string; requirement: string; label: string }) {
+export function OpenInspection({ part, requirement, label, next = false }: OpenInspectionProps) {
   const router = useRouter();
   const [busy, setBusy] = useState(false);
   const [problem, setProblem] = useState<Problem>();
@@ -25,7 +33,7 @@ export function OpenInspection({ part, requirement, label }: { part: string; req
   };
   return (
     <>
-      <Button kind="primary" busy={busy} onClick={() => void open()}>
+      <Button {...(next ? { kind: 'primary', size: 'capture' } : {})} busy={busy} onClick={() => void open()}>
         {label}
       </Button>
       {problem ? <ProblemNotice problem={problem} /> : null}

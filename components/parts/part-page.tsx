@@ -5,7 +5,6 @@ import { sendJson } from '@/components/forms/send-json';
 import { HoldDialog } from '@/components/holds/hold-dialog';
 import { useMessages } from '@/components/theme/use-messages';
 import { useAnswer } from '@/components/theme/use-answer';
-import { DataTable } from '@/components/ui/data-table';
 import { Notice, ProblemNotice } from '@/components/ui/notice';
 import { PageHeader } from '@/components/ui/page-header';
 import { LinkButton } from '@/components/ui/button';
@@ -15,63 +14,7 @@ import { Skeleton } from '@/components/ui/skeleton';
 import { StateWord } from '@/components/ui/state-word';
 import { When } from '@/components/ui/when';
 import type { Part } from '@/services/contracts/parts';
-import { OpenInspection } from './open-inspection';
-
-type Requirement = Part['requirements'][number];
-
-function RequirementAction({ part, one, mayInspect }: { part: Part; one: Requirement; mayInspect: boolean }) {
-  const t = useMessages('parts');
-  const open = ['open', 'in-work', 'to-be-repeated'].includes(one.state) && mayInspect && !part.held;
-  return (
-    <span className="flex flex-wrap items-center gap-3">
-      {one.inspection ? (
-        <Link className="text-accent underline underline-offset-4" href={`/inspections/${one.inspection.id}`}>
-          {t('read', { number: one.inspection.number })}
-        </Link>
-      ) : null}
-      {open ? (
-        <OpenInspection
-          part={part.id}
-          requirement={one.id}
-          label={t(one.draft ? 'goOn' : 'begin', { operation: one.operation, title: one.title })}
-        />
-      ) : null}
-    </span>
-  );
-}
-
-/** Where a segment leads: the inspection that stands for it, the draft, or the row that offers to begin one. */
-function hrefOf({ id, inspection, draft }: Requirement): string {
-  if (draft) return `/inspections/${draft.id}`;
-  return inspection ? `/inspections/${inspection.id}` : `#op-${id}`;
-}
-
-function Route({ part, mayInspect }: { part: Part; mayInspect: boolean }) {
-  const t = useMessages('parts');
-  return (
-    <Panel title={t('route')}>
-      <div className="grid items-start gap-6 2xl:grid-cols-[20rem_minmax(0,1fr)]">
-        <Ring
-          size="large"
-          held={part.held}
-          pointerOnly
-          segments={part.requirements.map((one) => ({ ...one, title: `${one.operation} ${one.title}`, href: hrefOf(one) }))}
-        />
-        <DataTable<Requirement>
-          caption={t('route')}
-          rows={part.requirements}
-          rowKey={(row) => row.id}
-          columns={[
-            { key: 'operation', title: t('operation'), cell: (row) => <span id={`op-${row.id}`}>{row.operation}</span> },
-            { key: 'title', title: t('ring'), cell: (row) => row.title, names: true },
-            { key: 'state', title: t('state'), cell: (row) => <StateWord state={row.state} /> },
-            { key: 'act', title: t('act'), cell: (row) => <RequirementAction part={part} one={row} mayInspect={mayInspect} /> },
-          ]}
-        />
-      </div>
-    </Panel>
-  );
-}
+import { PartRoute } from './part-route';
 
 function Side({ part }: { part: Part }) {
   const t = useMessages('parts');
@@ -187,7 +130,7 @@ export function PartPage({ id, mayInspect, mayHold }: Props) {
         </Notice>
       ))}
       <div className="grid gap-4 xl:grid-cols-[minmax(0,1fr)_24rem]">
-        <Route part={part} mayInspect={mayInspect} />
+        <PartRoute part={part} mayInspect={mayInspect} />
         <Side part={part} />
       </div>
     </div>

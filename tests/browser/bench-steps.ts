@@ -16,7 +16,10 @@ async function openPart(page: Page, serial: string): Promise<void> {
 
 export async function inspect(page: Page, serial: string, title: string): Promise<void> {
   await openPart(page, serial);
-  await page.getByRole('button', { name: new RegExp(`(Inspect|Go on with) .*${title}`) }).click();
+  await page
+    .getByRole('button', { name: new RegExp(`(Inspect|Go on with) .*${title}`) })
+    .first()
+    .click();
   await page.waitForURL(/\/inspections\//);
   await page.getByRole('heading', { level: 1 }).waitFor();
 }
