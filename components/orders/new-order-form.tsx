@@ -2,16 +2,18 @@
 
 import { useState } from 'react';
 import { array, object, string } from 'yup';
+import { CheckField } from '@/components/forms/check-field';
 import { DateField } from '@/components/forms/date-field';
 import { FormStatus } from '@/components/forms/form-status';
 import { ProblemForm, useProblemForm } from '@/components/forms/problem-form';
 import { SelectField } from '@/components/forms/select-field';
 import { sendJson } from '@/components/forms/send-json';
 import { SubmitButton } from '@/components/forms/submit-button';
-import { TextField } from '@/components/forms/text-field';
+import { TextAreaField, TextField } from '@/components/forms/text-field';
 import { useMessages } from '@/components/theme/use-messages';
 import { Button } from '@/components/ui/button';
 import { Notice } from '@/components/ui/notice';
+import { statementsOfText } from '@/services/contracts/order-clauses';
 import type { Customer, Order } from '@/services/contracts/orders';
 import type { Drawing } from '@/services/contracts/plans';
 
@@ -21,27 +23,55 @@ interface Props {
   readonly onDone: () => void;
 }
 
-const emptyLine = { drawing: '', quantity: '', dueOn: '' };
+const emptyLine = { drawing: '', quantity: '', dueOn: '', images: false, values: false, statements: '' };
+
+/** What the line demands beside the drawing. */
+function LineClauses({ place }: { readonly place: number }) {
+  const t = useMessages('orders');
+  const line = (place + 1) * 10;
+  return (
+    <div className="col-span-full grid gap-x-4 md:grid-cols-[minmax(0,2fr)_minmax(0,1fr)]">
+      <TextAreaField
+        optional
+        name={`lines.${place}.statements`}
+        label={t('statementsOf', { line })}
+        hint={t('statementsHint')}
+        rows={2}
+      />
+      <div>
+        <CheckField name={`lines.${place}.images`} label={t('imagesOf', { line })} />
+        <CheckField name={`lines.${place}.values`} label={t('valuesOf', { line })} />
+      </div>
+    </div>
+  );
+}
 
 /** Enters a purchase order with its lines; only drawings of the chosen customer can be ordered. */
 export function NewOrderForm({ customers, drawings, onDone }: Props) {
   const t = useMessages('orders');
   const [done, setDone] = useState('');
   const needed = string().trim().required(t('needed'));
+  const statementLines = string().test('lines', t('statementForm'), (text = '') => {
+    const written = text.split('\n').filter((one) => one.trim() !== '');
+    return statementsOfText(text).length === written.length;
+  });
   const form = useProblemForm({
     initialValues: { customer: '', purchaseOrder: '', lines: [emptyLine] },
     validationSchema: object({
       customer: needed,
       purchaseOrder: needed,
-      lines: array().of(object({ drawing: needed, quantity: needed.matches(/^[1-9]\d*$/, t('whole')) })),
+      lines: array().of(
+        object({ drawing: needed, quantity: needed.matches(/^[1-9]\d*$/, t('whole')), statements: statementLines }),
+      ),
     }),
     onSubmit: async ({ lines, ...head }, { resetForm }) => {
       setDone('');
       const body = {
         ...head,
-        lines: lines.map(({ drawing, quantity, dueOn }) => {
+        lines: lines.map(({ drawing, quantity, dueOn, images, values: shown, statements }) => {
           const [number = '', revision = ''] = drawing.split('\n');
-          return { drawing: number, revision, quantity: Number(quantity), ...(dueOn === '' ? {} : { dueOn }) };
+          const clauses = { images, values: shown, statements: statementsOfText(statements) };
+          return { drawing: number, revision, quantity: Number(quantity), clauses, ...(dueOn === '' ? {} : { dueOn }) };
         }),
       };
       const { number } = await sendJson<Order>('/api/orders', { body });
@@ -87,6 +117,7 @@ export function NewOrderForm({ customers, drawings, onDone }: Props) {
               {t('removeLine', { line: (place + 1) * 10 })}
             </Button>
           ) : null}
+          <LineClauses place={place} />
         </div>
       ))}
       <div className="flex gap-3">

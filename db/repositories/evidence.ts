@@ -1,3 +1,4 @@
+import { orderClauses } from '../../services/contracts/order-clauses';
 import { execute, isoOf, select, selectOne, sqlTimeOf, type Reading, type Work } from '../work';
 import type { EvidenceRole } from '../../services/contracts/evidence';
 
@@ -128,7 +129,6 @@ export async function dropLink(work: Work, inspectionId: string, evidenceId: str
 
 /**
  * Is a file part of a released part of this customer, on an order line whose clauses show images?
- * (clauses.images === true.)
  */
 export async function customerMaySeeFile(reading: Reading, evidenceId: string, customerId: string): Promise<boolean> {
   const rows = await select<{ clauses: string }>(
@@ -138,5 +138,5 @@ export async function customerMaySeeFile(reading: Reading, evidenceId: string, c
      WHERE l.evidence_id = ? AND p.customer_id = ? AND r.customer_id = ?`,
     [evidenceId, customerId, customerId],
   );
-  return rows.some(({ clauses }) => (JSON.parse(clauses) as { images?: unknown } | null)?.images === true);
+  return rows.some(({ clauses }) => orderClauses.parse(JSON.parse(clauses)).images);
 }

@@ -1,3 +1,4 @@
+import { orderClauses } from '../../services/contracts/order-clauses';
 import type { Order } from '../../services/contracts/orders';
 import { isoOf, select, sqlTimeOf, type Reading } from '../work';
 
@@ -14,7 +15,7 @@ async function withLines(reading: Reading, heads: readonly Head[]): Promise<Orde
   );
   const lines = new Map<string, Line[]>(heads.map(({ id }) => [id, []]));
   for (const { orderId, clauses, ...rest } of rows)
-    lines.get(orderId)?.push({ ...rest, clauses: JSON.parse(clauses) as Line['clauses'] });
+    lines.get(orderId)?.push({ ...rest, clauses: orderClauses.parse(JSON.parse(clauses)) });
   return heads.map((head) => ({ ...head, lines: lines.get(head.id) ?? [] }));
 }
 

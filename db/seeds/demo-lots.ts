@@ -160,6 +160,12 @@ export async function seedLots(people: Cast, plans: Readonly<Record<DemoPartNumb
 }
 
 /** What the two customers ordered; answers order-line ids by customer code and part number. */
+/** What the two customers want printed on their certificates. */
+const statements = {
+  TARN: [{ code: 'TT-Q 4.2', text: 'The parts were cast, inspected and packed at the address above.' }],
+  CORV: [{ code: 'CR-07', text: 'Aucune reprise par soudage n’a été faite.' }],
+};
+
 export async function seedOrders(customerIds: Readonly<Record<'TARN' | 'CORV', string>>): Promise<Record<string, string>> {
   return inTransaction(null, async (work) => {
     const year = work.now.slice(0, 4);
@@ -198,7 +204,7 @@ export async function seedOrders(customerIds: Readonly<Record<'TARN' | 'CORV', s
             (place + 1) * 10,
             quantity,
             at,
-            JSON.stringify({ images: customer === 'TARN', values: true, statements: [] }),
+            JSON.stringify({ images: customer === 'TARN', values: true, statements: statements[customer] }),
             partNumber,
           ],
         );

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { day, id, instant, mark, page, pageQuery, words } from './common';
 import { operation } from './operation';
+import { orderClauses } from './order-clauses';
 
 const line = z.object({
   id,
@@ -10,7 +11,7 @@ const line = z.object({
   quantity: z.int(),
   released: z.int(),
   dueOn: z.string().nullable(),
-  clauses: z.record(z.string(), z.unknown()),
+  clauses: orderClauses,
 });
 export const order = z.object({
   id,
@@ -50,7 +51,7 @@ export const createOrder = operation({
           revision: mark,
           quantity: z.int().min(1).max(100000),
           dueOn: day.optional(),
-          clauses: z.record(z.string(), z.unknown()).default({}),
+          clauses: orderClauses.prefault({}),
         }),
       )
       .min(1)

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { canonicalJson } from './canonical-json';
+import { canonicalJson } from '@/services/engine/record/canonical';
 
 /** Text that prints as it reads: no control, format, bidirectional or zero-width characters; trimmed; composed (NFC). */
 function printed(most: number) {

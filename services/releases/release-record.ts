@@ -3,6 +3,7 @@ import { thePlant } from '@/db/repositories/plants';
 import type { ShipmentRow } from '@/db/repositories/shipments';
 import { selectOne, type Work } from '@/db/work';
 import type { Actor } from '@/services/contracts/actor';
+import { orderClauses } from '@/services/contracts/order-clauses';
 import { environment } from '@/services/environment';
 import { certificateSentences } from '@/services/pdf/certificate-words';
 import { certificateRecord, type CertificateRecord, type CertificateSerial } from '@/services/pdf/certificate-record';
@@ -95,6 +96,6 @@ export async function buildReleaseRecord(
     place: lines(plant.address)[1] ?? plant.name,
     verifyUrl: `${environment().RINGTRUE_BASE_URL}/verify?number=${number}&check=${checkCode}`,
     timeStamp: 'none',
-    clauses: [],
+    clauses: orderClauses.parse(JSON.parse(shipment.clauses)).statements,
   });
 }

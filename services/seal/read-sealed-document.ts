@@ -1,5 +1,5 @@
 import { decodePDFRawStream, PDFArray, PDFDict, PDFDocument, PDFHexString, PDFName, PDFRawStream, PDFString } from 'pdf-lib';
-import { canonicalJson } from '../pdf/canonical-json';
+import { canonicalJson } from '@/services/engine/record/canonical';
 import { certificateRecord } from '../pdf/certificate-record';
 import type { CertificateRecord } from '../pdf/certificate-record';
 import { sealFieldName } from './reserve-seal';

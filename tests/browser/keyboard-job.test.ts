@@ -1,33 +1,25 @@
 import { existsSync, statSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
-import type { Browser } from 'playwright-core';
 import sharp from 'sharp';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { demoPassword, openBrowser, openDesk, picture, scratch, type Desk } from '../support/browser';
+import { afterAll, describe, expect, it } from 'vitest';
+import { demoPassword, browserOfThisFile, openDesk, picture, scratch, type Desk } from '../support/browser';
 import { Keys } from '../support/keyboard';
 import { testAddress } from '../support/stack';
 
 const serial = 'T10422';
 const dicom = '/usr/lib/python3/dist-packages/pydicom/data/test_files/CT_small.dcm';
 
-let browser: Browser;
 const files = scratch();
+const browser = browserOfThisFile();
 
-beforeAll(async () => {
-  browser = await openBrowser();
-});
-
-afterAll(async () => {
-  await browser.close();
-  files.remove();
-});
+afterAll(files.remove);
 
 interface Typist extends Desk {
   readonly keys: Keys;
 }
 
 async function typist(email: string): Promise<Typist> {
-  const desk = await openDesk(browser);
+  const desk = await openDesk(browser.open());
   const keys = new Keys(desk.page);
   await desk.page.goto(`${testAddress()}/sign-in`);
   await keys.type(desk.page.getByLabel('E-mail'), email);

@@ -2,10 +2,9 @@ import { execFileSync } from 'node:child_process';
 import { createHash } from 'node:crypto';
 import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
-import type { Browser } from 'playwright-core';
 import sharp from 'sharp';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { expectNoFaults, openBrowser, openDesk, scratch, signIn, type Desk } from '../support/browser';
+import { afterAll, describe, expect, it } from 'vitest';
+import { browserOfThisFile, expectNoFaults, openDesk, scratch } from '../support/browser';
 import { testAddress } from '../support/stack';
 import { examine, measureWalls, penetrant, radiograph, weigh } from './bench-steps';
 import { codesOn, download, gatherAndRelease, traceAsAuditor, trustedBy, verifyAsStranger } from './release-steps';
@@ -13,26 +12,13 @@ import { codesOn, download, gatherAndRelease, traceAsAuditor, trustedBy, verifyA
 const serial = 'T10413';
 const dicom = '/usr/lib/python3/dist-packages/pydicom/data/test_files/CT_small.dcm';
 
-let browser: Browser;
 const files = scratch();
+const browser = browserOfThisFile();
 
-beforeAll(async () => {
-  browser = await openBrowser();
-});
-
-afterAll(async () => {
-  await browser.close();
-  files.remove();
-});
+afterAll(files.remove);
 
 const missing = (program: string): boolean =>
   !['/usr/bin', '/usr/local/bin', '/bin'].some((folder) => existsSync(path.join(folder, program)));
-
-async function deskOf(email: string): Promise<Desk> {
-  const desk = await openDesk(browser);
-  await signIn(desk, email);
-  return desk;
-}
 
 async function takePhotograph(): Promise<string> {
   const file = path.join(files.folder, 'penetrant.jpg');
@@ -59,7 +45,7 @@ describe('the main job, from sign-in to the trace', () => {
       if (missing(program)) context.skip(`${program} is not installed`);
     }
     if (!existsSync(dicom)) context.skip('python3-pydicom is not installed');
-    const inspector = await deskOf('inspector@aldermoor.example');
+    const inspector = await browser.desk('inspector@aldermoor.example');
     const photograph = await takePhotograph();
     await measureWalls(inspector.page, serial, files.folder);
     await examine(inspector.page, serial, 'Visual after cut-off', '40');
@@ -68,13 +54,13 @@ describe('the main job, from sign-in to the trace', () => {
     await weigh(inspector.page, serial);
     await examine(inspector.page, serial, 'Mark and read back', '42');
 
-    const administrator = await deskOf('administrator@aldermoor.example');
-    const signatory = await deskOf('signatory@aldermoor.example');
+    const administrator = await browser.desk('administrator@aldermoor.example');
+    const signatory = await browser.desk('signatory@aldermoor.example');
     const number = await gatherAndRelease(administrator, signatory, serial);
 
-    const customer = await deskOf('quality@tarnside.example');
+    const customer = await browser.desk('quality@tarnside.example');
     const pdf = await download(customer, number, files.folder);
-    const other = await deskOf('quality@corvane.example');
+    const other = await browser.desk('quality@corvane.example');
     const foreign = await other.page.goto(`${testAddress()}/api/certificates/${number}/pdf`);
     expect(foreign?.status()).toBe(404);
 
@@ -86,9 +72,9 @@ describe('the main job, from sign-in to the trace', () => {
     expect(record.serials).toMatchObject([{ serial, heat: 'H-26-118' }]);
     expect(codesOn(pdf, files.folder)).toContain(record.verifyUrl);
 
-    const stranger = await openDesk(browser);
+    const stranger = await openDesk(browser.open());
     await verifyAsStranger(stranger, record.verifyUrl, pdf, files.folder);
-    const auditor = await deskOf('auditor@fennick.example');
+    const auditor = await browser.desk('auditor@fennick.example');
     const pixels = createHash('sha256').update(readFileSync(photograph)).digest('hex').slice(0, 8);
     await traceAsAuditor(auditor, serial, ['H-26-118', pixels, number, 'DD-02']);
     expectNoFaults(inspector, { cut: true });

@@ -1,9 +1,8 @@
-import type { Browser } from 'playwright-core';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { describe, expect, it } from 'vitest';
 import {
   axeFindings,
   expectNoFaults,
-  openBrowser,
+  browserOfThisFile,
   openDesk,
   picture,
   signIn,
@@ -13,15 +12,7 @@ import {
 import { testAddress } from '../support/stack';
 import { pagesOfTheProduct, visits } from './page-visits';
 
-let browser: Browser;
-
-beforeAll(async () => {
-  browser = await openBrowser();
-});
-
-afterAll(async () => {
-  await browser.close();
-});
+const browser = browserOfThisFile();
 
 const readers = [...new Set(Object.values(visits).map(({ email }) => email))];
 
@@ -43,7 +34,7 @@ describe('every page', () => {
 
   describe.each(['floor', 'reading-room', 'booth'] as const satisfies readonly PaletteName[])('in the %s palette', (palette) => {
     it.each(readers)('has nothing that axe finds, for %s', { timeout: 180_000 }, async (email) => {
-      const desk = await openDesk(browser, { palette });
+      const desk = await openDesk(browser.open(), { palette });
       if (email !== null) await signIn(desk, email);
       for (const [pattern, visit] of Object.entries(visits).filter(([, one]) => one.email === email)) {
         const addresses = visit.find === undefined ? [pattern] : await visit.find(desk.page);
@@ -59,7 +50,7 @@ describe('every page', () => {
 
 describe('who may see what', () => {
   it('leads a stranger to sign-in, and back to what was asked for', async () => {
-    const stranger = await openDesk(browser);
+    const stranger = await openDesk(browser.open());
     await stranger.page.goto(`${testAddress()}/parts?serial=T104`);
     await stranger.page.waitForURL(/\/sign-in\?next=%2Fparts%3Fserial%3DT104$/);
     await stranger.page.getByLabel('E-mail').fill('inspector@aldermoor.example');
@@ -70,7 +61,7 @@ describe('who may see what', () => {
   });
 
   it('hides what is not for a role, and says so in words', async () => {
-    const customer = await openDesk(browser);
+    const customer = await openDesk(browser.open());
     await signIn(customer, 'quality@tarnside.example');
     for (const address of ['/parts', '/no-such-page']) {
       const answer = await customer.page.goto(`${testAddress()}${address}`);
@@ -81,7 +72,7 @@ describe('who may see what', () => {
   });
 
   it('speaks French where the browser asks for it', async () => {
-    const desk = await openDesk(browser, { locale: 'fr' });
+    const desk = await openDesk(browser.open(), { locale: 'fr' });
     await desk.page.goto(`${testAddress()}/sign-in`);
     await desk.page.getByRole('button', { name: 'Se connecter' }).waitFor();
     expect(await desk.page.locator('html').getAttribute('lang')).toBe('fr');

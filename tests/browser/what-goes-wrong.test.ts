@@ -1,30 +1,16 @@
-import type { Browser, Page } from 'playwright-core';
-import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { demoPassword, openBrowser, openDesk, signIn, type Desk } from '../support/browser';
+import type { Page } from 'playwright-core';
+import { describe, expect, it } from 'vitest';
+import { browserOfThisFile, demoPassword } from '../support/browser';
 import { testAddress } from '../support/stack';
 import { inspect } from './bench-steps';
 
-let browser: Browser;
-
-beforeAll(async () => {
-  browser = await openBrowser();
-});
-
-afterAll(async () => {
-  await browser.close();
-});
-
-async function deskOf(email: string): Promise<Desk> {
-  const desk = await openDesk(browser);
-  await signIn(desk, email);
-  return desk;
-}
+const browser = browserOfThisFile();
 
 const savedWords = (page: Page) => page.locator('[data-saved]').textContent();
 
 describe('the bench keeps what was entered', () => {
   it('when the session ends under the person’s hands, until they have signed in again', { timeout: 90_000 }, async () => {
-    const { page, context } = await deskOf('inspector2@aldermoor.example');
+    const { page, context } = await browser.desk('inspector2@aldermoor.example');
     await inspect(page, 'T10423', 'Ultrasonic wall thickness');
     // As `sign out everywhere` on another machine does it.
     expect((await page.request.delete(`${testAddress()}/api/session`)).status()).toBe(204);
@@ -47,7 +33,7 @@ describe('the bench keeps what was entered', () => {
   });
 
   it('when two tabs write: the later one sees both and chooses', { timeout: 90_000 }, async () => {
-    const { page, context } = await deskOf('inspector@aldermoor.example');
+    const { page, context } = await browser.desk('inspector@aldermoor.example');
     await inspect(page, 'T10424', 'Ultrasonic wall thickness');
     const second = await context.newPage();
     await second.goto(page.url());
@@ -66,7 +52,7 @@ describe('the bench keeps what was entered', () => {
   });
 
   it('when the button is pressed twice: one signature', { timeout: 90_000 }, async () => {
-    const { page, context } = await deskOf('inspector2@aldermoor.example');
+    const { page, context } = await browser.desk('inspector2@aldermoor.example');
     const signatures: number[] = [];
     page.on('response', (answer) => {
       if (answer.url().endsWith('/signature')) signatures.push(answer.status());

@@ -24,17 +24,30 @@ const line = (changes: object = {}) => ({ drawing, revision: 'C', quantity: 12, 
 
 describe('orders', () => {
   it('keeps lines in order with their dates and clauses, numbered by ten', async () => {
+    const statements = [{ code: 'Q-12', text: 'No weld repair was made.' }];
     const answer = await post({
       customer: plan.customerId,
       purchaseOrder: fresh('PO'),
-      lines: [line({ dueOn: '2027-03-09', clauses: { retentionYears: 40 } }), line({ quantity: 3 })],
+      lines: [line({ dueOn: '2027-03-09', clauses: { retentionYears: 40, statements } }), line({ quantity: 3 })],
     });
     expect(answer.status).toBe(201);
     const made = orderContract.response.parse(answer.json);
     expect(made.number).toMatch(/^O-\d{4}-\d{5}$/);
     expect(made.lines.map((one) => [one.line, one.quantity, one.released, one.dueOn, one.clauses])).toEqual([
-      [10, 12, 0, '2027-03-09', { retentionYears: 40 }],
-      [20, 3, 0, null, {}],
+      [10, 12, 0, '2027-03-09', { images: false, values: false, statements, retentionYears: 40 }],
+      [20, 3, 0, null, { images: false, values: false, statements: [] }],
+    ]);
+  });
+
+  it('refuses a clause that nobody would carry out, naming it', async () => {
+    const answer = await post({
+      customer: plan.customerId,
+      purchaseOrder: fresh('PO'),
+      lines: [line({ clauses: { imagse: true } }), line({ clauses: { statements: [{ code: 'Q-1', text: '' }] } })],
+    });
+    expect([answer.status, answer.errors.map(({ path }) => path)]).toEqual([
+      422,
+      ['lines.0.clauses.imagse', 'lines.1.clauses.statements.0.text'],
     ]);
   });
 

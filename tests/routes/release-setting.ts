@@ -28,6 +28,9 @@ interface Floor {
 }
 
 /** Who and what the tests of findings, shipments and certificates share; filled by `prepareFloor`. */
+/** What every order line of these tests wants printed. */
+export const orderedStatements = [{ code: 'Q-12', text: 'No weld repair was made.' }];
+
 export const floor = {} as Floor;
 
 async function withReleaseAuthority(): Promise<Person> {
@@ -155,8 +158,8 @@ export async function orderLine(quantity = 100, revision = 'C'): Promise<string>
     await execute(
       work,
       `INSERT INTO order_lines (id, order_id, line, drawing_revision_id, quantity, clauses)
-       SELECT ?, ?, 10, id, ?, '{}' FROM drawing_revisions WHERE drawing_id = ? AND revision = ?`,
-      [lineId, orderId, quantity, bench.plan.drawingId, revision],
+       SELECT ?, ?, 10, id, ?, ? FROM drawing_revisions WHERE drawing_id = ? AND revision = ?`,
+      [lineId, orderId, quantity, JSON.stringify({ statements: orderedStatements }), bench.plan.drawingId, revision],
     );
   });
   return lineId;

@@ -13,6 +13,7 @@ import {
   floor,
   heatLot,
   orderLine,
+  orderedStatements,
   partState,
   prepareFloor,
   releaseAnswer,
@@ -64,6 +65,7 @@ describe('a release', () => {
     expect(createHash('sha256').update(text).digest('hex')).toBe(row?.digest);
     expect(canonicalJson(JSON.parse(text))).toBe(text);
     const record = certificateRecord.parse(JSON.parse(text));
+    expect(record.clauses).toEqual(orderedStatements);
     expect(record).toMatchObject({ number: certificate, quantity: 2, type31: true, signatory: { name: floor.signatory.name } });
     expect(record.serials.map((one) => one.inspections.map(({ result }) => result))).toEqual([
       ['accept', 'accept'],

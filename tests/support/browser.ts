@@ -3,7 +3,7 @@ import { tmpdir } from 'node:os';
 import path from 'node:path';
 import axe from 'axe-core';
 import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core';
-import { expect } from 'vitest';
+import { afterAll, beforeAll, expect } from 'vitest';
 import { testAddress } from './stack';
 
 export const demoPassword = 'sound-castings-ring-true';
@@ -26,6 +26,27 @@ export function openBrowser(): Promise<Browser> {
 }
 
 export type PaletteName = 'floor' | 'reading-room' | 'booth';
+
+/** One browser for the tests of a file; closed after the last of them. `desk` signs a person in at a place of their own. */
+export function browserOfThisFile(): { readonly open: () => Browser; readonly desk: (email: string) => Promise<Desk> } {
+  let browser: Browser | undefined;
+  beforeAll(async () => {
+    browser = await openBrowser();
+  });
+  afterAll(async () => {
+    await browser?.close();
+  });
+  const open = () => {
+    if (!browser) throw new Error('the browser is open while tests run');
+    return browser;
+  };
+  const desk = async (email: string) => {
+    const made = await openDesk(open());
+    await signIn(made, email);
+    return made;
+  };
+  return { open, desk };
+}
 
 /** A browser of its own for one person: signed in through the page, with faults of the page's scripts collected. */
 export interface Desk {
