@@ -45,6 +45,7 @@ export const navigation: readonly NavigationItem[] = [
   { href: '/shipments', label: 'shipments', group: 'judgement', roles: judges },
   { href: '/holds', label: 'holds', group: 'judgement', roles: [...staff, 'auditor'] },
   { href: '/certificates', label: 'certificates', group: 'judgement', roles },
+  { href: '/drawings', label: 'drawings', group: 'basis', roles: [...staff, 'auditor'] },
   { href: '/personnel', label: 'personnel', group: 'basis', roles: [...staff, 'auditor'] },
   { href: '/trace', label: 'trace', group: 'history', roles: [...staff, 'auditor'] },
   { href: '/record', label: 'record', group: 'history', roles: ['reviewer', 'administrator', 'auditor'] },
@@ -64,6 +65,8 @@ export function navigationFor(role: Role): { group: NavigationItem['group']; ite
 
 /** Whether an item is where the reader is: its page or one below it. */
 export function isHere(href: string, path: string): boolean {
+  // A plan issue is a reading of a drawing and is found under it.
+  if (href === '/drawings' && path.startsWith('/plans/')) return true;
   return href === '/' ? path === '/' : path === href || path.startsWith(`${href}/`);
 }
 

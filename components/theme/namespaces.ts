@@ -22,4 +22,5 @@ export { messages as lots } from '@/components/lots/messages';
 export { messages as holds } from '@/components/holds/messages';
 export { messages as orders } from '@/components/orders/messages';
 export { messages as customers } from '@/components/customers/messages';
+export { messages as plans } from '@/components/plans/messages';
 export { messages as record } from '@/components/record/messages';

@@ -31,6 +31,7 @@ export const knownStates = {
   checked: { glyph: 'half-disc', tone: 'accent' },
   approved: { glyph: 'closed', tone: 'accept' },
   signed: { glyph: 'closed', tone: 'accept' },
+  'withdrawn-for-error': { glyph: 'cross', tone: 'reject' },
   superseded: { glyph: 'back', tone: 'soft' },
   voided: { glyph: 'cross', tone: 'soft' },
   withdrawn: { glyph: 'cross', tone: 'reject' },

@@ -7,7 +7,7 @@ import type { Plan, PlanContent } from '@/services/contracts/plan-content';
 import { notFound, Problem } from '@/services/http/problem';
 import type { Recorded } from '@/services/http/route';
 import { contentOf, planContentDigest } from './plan-content-digest';
-import { keyOfRequirement, planFaults } from './plan-faults';
+import { keyOfRequirement, planFaults } from '@/services/contracts/plan-faults';
 
 type By = Work & { readonly actor: Actor };
 

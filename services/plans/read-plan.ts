@@ -5,7 +5,7 @@ import type { Plan } from '@/services/contracts/plan-content';
 import { notFound, type FieldError } from '@/services/http/problem';
 import { Raw } from '@/services/http/route';
 import { contentOf } from './plan-content-digest';
-import { planFaults } from './plan-faults';
+import { planFaults } from '@/services/contracts/plan-faults';
 
 async function found(reading: Reading, planId: string): Promise<Plan> {
   const plan = await planById(reading, planId);

@@ -47,6 +47,12 @@ async function benches(page: Page): Promise<string[]> {
   return found;
 }
 
+/** The approved issue of a drawing and the draft that waits beside it. */
+async function planIssues(page: Page): Promise<string[]> {
+  const plans = await items<{ id: string; state: string }>(page, '/api/drawings/AM-2210/plans');
+  return plans.filter(({ state }) => state === 'approved' || state === 'draft').map(({ id }) => `/plans/${id}`);
+}
+
 /** Every page of the product by its address in app/; a page that is missing here fails the test that reads this. */
 export const visits: Readonly<Record<string, Visit>> = {
   '/sign-in': { email: null },
@@ -64,6 +70,8 @@ export const visits: Readonly<Record<string, Visit>> = {
   '/shipments/[number]': { email: at('signatory'), find: first('/api/shipments', '/shipments', 'number') },
   '/certificates': { email: customer },
   '/certificates/[number]': { email: customer, find: first('/api/certificates', '/certificates', 'number') },
+  '/drawings': { email: at('reviewer') },
+  '/plans/[id]': { email: at('reviewer'), find: planIssues },
   '/personnel': { email: at('reviewer') },
   '/trace': { email: auditor },
   '/trace/[id]': { email: auditor, find: first('/api/parts?serial=T10410', '/trace') },

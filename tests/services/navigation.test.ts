@@ -15,6 +15,7 @@ describe('the pages that a role is shown', () => {
       '/lots',
       '/holds',
       '/certificates',
+      '/drawings',
       '/personnel',
       '/trace',
       '/record',
@@ -39,6 +40,7 @@ describe('where the reader is', () => {
     ['/', '/', true],
     ['/', '/parts', false],
     ['/parts', '/parts/3', true],
+    ['/drawings', '/plans/7', true],
     ['/parts', '/partsbook', false],
   ])('%s at %s: %s', (href, path, expected) => {
     expect(isHere(href, path)).toBe(expected);

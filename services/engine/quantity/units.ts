@@ -160,6 +160,9 @@ const UNITS: ReadonlyMap<string, Unit> = new Map(
   ),
 );
 
+/** Every unit as spelt, quantity by quantity. */
+export const unitSymbols: readonly string[] = [...UNITS.keys()];
+
 /** The unit so spelt; the Greek mu (U+03BC) means the micro sign (U+00B5). Undefined for a unit not in the table. */
 export function unitOf(symbol: string): Unit | undefined {
   return UNITS.get(symbol.replaceAll('\u03bc', '\u00b5'));

@@ -1,6 +1,6 @@
-import type { PlanContent } from '@/services/contracts/plan-content';
-import { criteriaFaults } from '@/services/engine/evaluate/evaluate';
-import type { FieldError } from '@/services/http/problem';
+import type { Fault } from '../engine/evaluate/fault';
+import { planContent, type PlanContent } from './plan-content';
+import { criteriaFaults } from '../engine/evaluate/evaluate';
 
 function numbersOf(list: unknown, key: string): Set<string> {
   if (!Array.isArray(list)) return new Set();
@@ -16,8 +16,8 @@ function duplicates(values: readonly string[]): Set<string> {
 }
 
 /** References of the route that lead nowhere, and names used twice. */
-function routeFaults(content: PlanContent): FieldError[] {
-  const faults: FieldError[] = [];
+function routeFaults(content: PlanContent): Fault[] {
+  const faults: Fault[] = [];
   const known = {
     characteristics: numbersOf(content.criteria.characteristics, 'number'),
     attributes: numbersOf(content.criteria.attributes, 'number'),
@@ -54,7 +54,7 @@ function routeFaults(content: PlanContent): FieldError[] {
 }
 
 /** Zones must lie on a view of the plan. */
-function viewFaults(content: PlanContent): FieldError[] {
+function viewFaults(content: PlanContent): Fault[] {
   const names = new Set(content.views.map(({ name }) => name));
   const zones = Array.isArray(content.criteria.zones) ? content.criteria.zones : [];
   return zones.flatMap((zone: unknown, place) => {
@@ -66,7 +66,7 @@ function viewFaults(content: PlanContent): FieldError[] {
 }
 
 /** Rework must reopen operations that are in the route. */
-function reworkFaults(content: PlanContent): FieldError[] {
+function reworkFaults(content: PlanContent): Fault[] {
   const keys = new Set(content.route.map(keyOfRequirement));
   return content.rework.flatMap((kind, place) =>
     kind.reopens.flatMap((key, index) =>
@@ -82,7 +82,14 @@ export function keyOfRequirement(row: { readonly key?: string | undefined; reado
   return row.key ?? `op-${row.operation}`;
 }
 
+/** As `planFaults`, for what is being typed: faults of form (a key that is no key, a place without a title) come first. */
+export function typedPlanFaults(content: PlanContent): Fault[] {
+  const parsed = planContent.safeParse(content);
+  const form = parsed.success ? [] : parsed.error.issues.map(({ path, message }) => ({ path: path.join('.'), message }));
+  return [...form, ...planFaults(content).filter(({ path }) => !form.some((one) => one.path === path))];
+}
+
 /** Everything that stands against checking or approving a plan, in one pass: form and meaning of criteria, route, views, rework. */
-export function planFaults(content: PlanContent): FieldError[] {
+export function planFaults(content: PlanContent): Fault[] {
   return [...criteriaFaults(content.criteria), ...routeFaults(content), ...viewFaults(content), ...reworkFaults(content)];
 }
