@@ -1,3 +1,4 @@
+import { newerCalibration, sameFunction } from './equipment';
 import { isoOf, select, selectOne, sqlTimeOf, type Reading } from '../work';
 
 /** What must be valid for an act to count: technique, uncertainty, equipment, people, process checks. */
@@ -62,24 +63,27 @@ export interface EquipmentRow {
   readonly certificate: string | null;
 }
 
+// Of several functions and ranges the one that counts least decides: left failed, or due soonest. Takes the day twice.
 const equipmentQuery = `SELECT e.id, e.number, e.title, e.kind, e.method, e.location, c.id AS calibrationId, c.as_left AS asLeft,
   DATE_FORMAT(c.calibrated_on, '%Y-%m-%d') AS calibratedOn, DATE_FORMAT(c.due_on, '%Y-%m-%d') AS dueOn, c.certificate
   FROM equipment e LEFT JOIN calibrations c ON c.id = (
-    SELECT n.id FROM calibrations n WHERE n.equipment_id = e.id AND n.calibrated_on <= ? ORDER BY n.calibrated_on DESC, n.created_at DESC, n.id DESC LIMIT 1)`;
+    SELECT n.id FROM calibrations n WHERE n.equipment_id = e.id AND n.calibrated_on <= ? AND NOT EXISTS (
+      SELECT 1 FROM calibrations m WHERE m.equipment_id = n.equipment_id AND m.calibrated_on <= ? AND ${sameFunction('n', 'm')} AND ${newerCalibration('n', 'm')})
+    ORDER BY n.as_left = 'failed' DESC, n.due_on, n.id LIMIT 1)`;
 
 /** Equipment in use for a method, with its last calibration on or before a day. */
 export async function equipmentOfMethod(reading: Reading, method: string, day: string): Promise<EquipmentRow[]> {
   return select<EquipmentRow>(
     reading,
     `${equipmentQuery} WHERE e.method = ? AND e.retired_at IS NULL ORDER BY e.number LIMIT 300`,
-    [day, method],
+    [day, day, method],
   );
 }
 
 /** Named equipment with the calibration that counted on a day. */
 export async function equipmentByIds(reading: Reading, ids: readonly string[], day: string): Promise<EquipmentRow[]> {
   if (ids.length === 0) return [];
-  return select<EquipmentRow>(reading, `${equipmentQuery} WHERE e.id IN (?) ORDER BY e.number`, [day, [...ids]]);
+  return select<EquipmentRow>(reading, `${equipmentQuery} WHERE e.id IN (?) ORDER BY e.number`, [day, day, [...ids]]);
 }
 
 export interface AuthorisationRow {
@@ -154,7 +158,10 @@ export interface CheckRow {
 
 const checkColumns = `id, scope, title, kind, result, ${isoOf('at')} AS at, ${isoOf('valid_until')} AS validUntil`;
 
-/** The last check of a scope at or before an instant, and the first after it. */
+/**
+ * The last check of a scope at or before an instant, and the first after it. A scope may have several checks (panel,
+ * lamp): of each the nearest is looked at, and one that failed stands for all, so that a good one does not hide it.
+ */
 export async function checksAround(
   reading: Reading,
   scope: string,
@@ -162,13 +169,17 @@ export async function checksAround(
 ): Promise<{ before: CheckRow | undefined; after: CheckRow | undefined }> {
   const before = await selectOne<CheckRow>(
     reading,
-    `SELECT ${checkColumns} FROM process_checks WHERE scope = ? AND at <= ? ORDER BY at DESC, id DESC LIMIT 1`,
-    [scope, sqlTimeOf(at)],
+    `SELECT ${checkColumns} FROM process_checks c WHERE scope = ? AND at <= ?
+       AND (result = 'good' OR NOT EXISTS (SELECT 1 FROM process_checks n WHERE n.scope = c.scope AND n.title = c.title AND n.at <= ? AND (n.at > c.at OR (n.at = c.at AND n.id > c.id))))
+     ORDER BY result = 'failed' DESC, at DESC, id DESC LIMIT 1`,
+    [scope, sqlTimeOf(at), sqlTimeOf(at)],
   );
   const after = await selectOne<CheckRow>(
     reading,
-    `SELECT ${checkColumns} FROM process_checks WHERE scope = ? AND at > ? ORDER BY at, id LIMIT 1`,
-    [scope, sqlTimeOf(at)],
+    `SELECT ${checkColumns} FROM process_checks c WHERE scope = ? AND at > ?
+       AND (result = 'good' OR NOT EXISTS (SELECT 1 FROM process_checks n WHERE n.scope = c.scope AND n.title = c.title AND n.at > ? AND (n.at < c.at OR (n.at = c.at AND n.id < c.id))))
+     ORDER BY result = 'failed' DESC, at, id LIMIT 1`,
+    [scope, sqlTimeOf(at), sqlTimeOf(at)],
   );
   return { before, after };
 }

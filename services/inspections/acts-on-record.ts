@@ -6,6 +6,7 @@ import {
   visionOf,
   type EquipmentRow,
 } from '@/db/repositories/act-conditions';
+import { foundOutSince } from '@/db/repositories/equipment';
 import type { Reading } from '@/db/work';
 import type { InspectionContent } from '@/services/contracts/inspection-content';
 import type { FieldError } from '@/services/http/problem';
@@ -90,6 +91,7 @@ export async function actsOnRecord(reading: Reading, inspection: InspectionCase,
           )
         : null;
     const equipment = await equipmentByIds(reading, act.equipment, day);
+    const foundOut = at === null ? [] : await foundOutSince(reading, act.equipment, at, day);
     const checks: CheckStanding[] = [];
     if (asked)
       for (const scope of inspection.asked.checks)
@@ -106,6 +108,10 @@ export async function actsOnRecord(reading: Reading, inspection: InspectionCase,
         ...(person ? [] : [{ path: `${path}.person`, message: act.person ? 'is not a known person' : 'who did it is needed' }]),
         ...(standing?.reasons ?? []).map((message) => ({ path: `${path}.person`, message })),
         ...equipmentFaults(path, act, equipment, method, day),
+        ...foundOut.map(({ id, calibratedOn }) => ({
+          path: `${path}.equipment.${String(act.equipment.indexOf(id))}`,
+          message: `${equipment.find((row) => row.id === id)?.number ?? ''} was found out of tolerance on ${calibratedOn}; an act before that does not count`,
+        })),
         ...checks.flatMap(({ reason, scope }) => (reason === null ? [] : [{ path: `${path}.checks.${scope}`, message: reason }])),
       ],
     });
