@@ -46,6 +46,9 @@ beforeEach(async () => {
 });
 afterAll(closeDatabase);
 
+/** A start a little later in each round, so that the two meet at every point of their ways. */
+const late = (round: number) => new Promise((go) => setTimeout(go, round * 2));
+
 const held = async (id: string) => (await partState(id))?.held;
 
 /** Codes of the gates that stand against a serial, as shown to the signatory. */
@@ -339,7 +342,7 @@ describe('at the same instant as a release', () => {
       bench.equipment = await gauge('ultrasonic-thickness', 'ut-gauge');
       const part = await finishedPart();
       const number = await shipmentOf([part.serial]);
-      const [release, failure] = await Promise.all([releasing(number), calibrating(bench.equipment)]);
+      const [release, failure] = await Promise.all([releasing(number), late(round).then(() => calibrating(bench.equipment))]);
       expect(failure.status).toBe(201);
       const [item] = calibrated(failure).suspects?.items ?? [];
       if (release.status === 201) {
@@ -361,7 +364,7 @@ describe('at the same instant as a release', () => {
       await inTransaction(null, (work) => recordCheck(work, bench.plan.line, 'good'));
       const part = await finishedPart();
       const number = await shipmentOf([part.serial]);
-      const [release, failure] = await Promise.all([releasing(number), checking()]);
+      const [release, failure] = await Promise.all([releasing(number), late(round).then(() => checking())]);
       expect(failure.status).toBe(201);
       const item = checked(failure).suspects?.items.find((one) => one.part.id === part.id);
       if (release.status === 201) {
@@ -377,7 +380,7 @@ describe('at the same instant as a release', () => {
       bench.equipment = await gauge('ultrasonic-thickness', 'ut-gauge');
       const part = await rawPart();
       const draft = await saved(await opened('wall', part.id), await wallContent('0.90', '0.90'));
-      const [signature, failure] = await Promise.all([signing(draft.id), calibrating(bench.equipment)]);
+      const [signature, failure] = await Promise.all([signing(draft.id), late(round).then(() => calibrating(bench.equipment))]);
       expect(failure.status).toBe(201);
       const listed = calibrated(failure).suspects?.items.some((one) => one.part.id === part.id) ?? false;
       expect([signature.status === 201, listed, signature.status === 422]).toEqual([
