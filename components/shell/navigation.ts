@@ -23,6 +23,7 @@ export interface NavigationItem {
     | 'equipment'
     | 'personnel'
     | 'processChecks'
+    | 'suspects'
     | 'trace'
     | 'insight'
     | 'record'
@@ -45,6 +46,10 @@ export const navigation: readonly NavigationItem[] = [
   { href: '/shipments', label: 'shipments', group: 'judgement', roles: judges },
   { href: '/holds', label: 'holds', group: 'judgement', roles: [...staff, 'auditor'] },
   { href: '/certificates', label: 'certificates', group: 'judgement', roles },
+  { href: '/techniques', label: 'techniques', group: 'basis', roles: [...judges, 'auditor'] },
+  { href: '/equipment', label: 'equipment', group: 'basis', roles: [...judges, 'auditor'] },
+  { href: '/process-checks', label: 'processChecks', group: 'basis', roles: [...staff, 'auditor'] },
+  { href: '/suspects', label: 'suspects', group: 'basis', roles: [...judges, 'auditor'] },
   { href: '/personnel', label: 'personnel', group: 'basis', roles: [...staff, 'auditor'] },
   { href: '/trace', label: 'trace', group: 'history', roles: [...staff, 'auditor'] },
   { href: '/record', label: 'record', group: 'history', roles: ['reviewer', 'administrator', 'auditor'] },

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { id, instant, page, pageQuery, password, words } from './common';
+import { id, instant, page, pageQuery, password, verdict, words } from './common';
 import { operation } from './operation';
 
 /** What made work suspect. */
@@ -11,7 +11,7 @@ const gone = z.object({ number: z.string(), customer: z.string() });
 const suspectInspection = z.object({
   id,
   number: z.string(),
-  verdict: z.string(),
+  verdict,
   actedAt: instant,
   group: id,
   operation: z.string(),

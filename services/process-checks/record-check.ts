@@ -4,11 +4,12 @@ import { databaseNow, type Work } from '@/db/work';
 import type { Actor } from '@/services/contracts/actor';
 import type { Check, recordCheck as contract } from '@/services/contracts/checks';
 import type { AnswerOf, BodyOf } from '@/services/contracts/operation';
+import { inWindow } from '@/services/engine/quantity/window';
 import { Problem, type FieldError } from '@/services/http/problem';
 import type { Recorded } from '@/services/http/route';
 import { instantOf } from '@/services/inspections/acts-on-record';
 import { openSuspects, takeLeaning } from '@/services/suspects/open-suspects';
-import { askedChecks, inWindow, keyOfCheck, type AskedCheck } from './required-checks';
+import { askedChecks, keyOfCheck, type AskedCheck } from './required-checks';
 
 type By = Work & { readonly actor: Actor };
 type Body = BodyOf<typeof contract>;

@@ -1,8 +1,6 @@
 import { approvedTechniques } from '@/db/repositories/techniques';
 import type { Reading } from '@/db/work';
 import type { RequiredCheck } from '@/services/contracts/techniques';
-import { compare, rationalOf } from '@/services/engine/quantity/decimal';
-import { convertValue, unitOf } from '@/services/engine/quantity/units';
 
 /** A check that approved techniques ask for, with the shortest time and every window they name. */
 export interface AskedCheck {
@@ -36,19 +34,4 @@ export async function askedChecks(reading: Reading): Promise<Map<string, AskedCh
     }
   }
   return found;
-}
-
-/** Does a value with its unit lie in a window, both ends included? Null when the units do not measure the same. */
-export function inWindow(
-  value: string,
-  unit: string,
-  window: { readonly unit: string; readonly lower: string | null; readonly upper: string | null },
-): boolean | null {
-  const [from, to] = [unitOf(unit), unitOf(window.unit)];
-  if (unit !== window.unit && (!from || !to || from.quantity !== to.quantity)) return null;
-  const read = from && to && unit !== window.unit ? convertValue(rationalOf(value), from, to) : rationalOf(value);
-  return (
-    (window.lower === null || compare(read, rationalOf(window.lower)) >= 0) &&
-    (window.upper === null || compare(read, rationalOf(window.upper)) <= 0)
-  );
 }
