@@ -54,9 +54,9 @@ describe('what must be valid for an inspection to count', () => {
     const day = (await newest.locator('time').first().getAttribute('datetime')) ?? '';
     await page.getByRole('button', { name: 'Record a calibration' }).click();
     const form = page.getByRole('dialog');
-    await form.getByLabel('As found').selectOption('failed');
+    await form.getByLabel('As found', { exact: true }).selectOption('failed');
     await form.getByText('This holds parts').waitFor();
-    await form.getByLabel('As left').selectOption('good');
+    await form.getByLabel('As left', { exact: true }).selectOption('good');
     await form.getByLabel(/^Bias found/).fill('0,028');
     await form.getByLabel('Calibrated on').fill(day);
     await form.getByLabel('Due on').fill(`${String(Number(day.slice(0, 4)) + 1)}${day.slice(4, 8)}01`);
