@@ -158,30 +158,32 @@ export interface CheckRow {
 
 const checkColumns = `id, scope, title, kind, result, ${isoOf('at')} AS at, ${isoOf('valid_until')} AS validUntil`;
 
-/**
- * The last check of a scope at or before an instant, and the first after it. A scope may have several checks (panel,
- * lamp): of each the nearest is looked at, and one that failed stands for all, so that a good one does not hide it.
- */
-export async function checksAround(
-  reading: Reading,
-  scope: string,
-  at: string,
-): Promise<{ before: CheckRow | undefined; after: CheckRow | undefined }> {
-  const before = await selectOne<CheckRow>(
+/** The checks of a scope under one title that stand around an instant: the last at or before it, and the first after. */
+export interface ChecksAround {
+  readonly title: string;
+  readonly before: CheckRow | undefined;
+  readonly after: CheckRow | undefined;
+}
+
+/** The checks around an instant, title by title: a good look at the lamp says nothing about the panel. */
+export async function checksAround(reading: Reading, scope: string, at: string): Promise<ChecksAround[]> {
+  const instant = sqlTimeOf(at);
+  const nearest = await select<{ title: string; beforeId: string | null; afterId: string | null }>(
     reading,
-    `SELECT ${checkColumns} FROM process_checks c WHERE scope = ? AND at <= ?
-       AND (result = 'good' OR NOT EXISTS (SELECT 1 FROM process_checks n WHERE n.scope = c.scope AND n.title = c.title AND n.at <= ? AND (n.at > c.at OR (n.at = c.at AND n.id > c.id))))
-     ORDER BY result = 'failed' DESC, at DESC, id DESC LIMIT 1`,
-    [scope, sqlTimeOf(at), sqlTimeOf(at)],
+    `SELECT t.title, (SELECT b.id FROM process_checks b WHERE b.scope = ? AND b.title = t.title AND b.at <= ? ORDER BY b.at DESC, b.id DESC LIMIT 1) AS beforeId,
+       (SELECT a.id FROM process_checks a WHERE a.scope = ? AND a.title = t.title AND a.at > ? ORDER BY a.at, a.id LIMIT 1) AS afterId
+     FROM (SELECT DISTINCT title FROM process_checks WHERE scope = ?) t ORDER BY t.title`,
+    [scope, instant, scope, instant, scope],
   );
-  const after = await selectOne<CheckRow>(
-    reading,
-    `SELECT ${checkColumns} FROM process_checks c WHERE scope = ? AND at > ?
-       AND (result = 'good' OR NOT EXISTS (SELECT 1 FROM process_checks n WHERE n.scope = c.scope AND n.title = c.title AND n.at > ? AND (n.at < c.at OR (n.at = c.at AND n.id < c.id))))
-     ORDER BY result = 'failed' DESC, at, id LIMIT 1`,
-    [scope, sqlTimeOf(at), sqlTimeOf(at)],
-  );
-  return { before, after };
+  const ids = nearest.flatMap(({ beforeId, afterId }) => [beforeId, afterId]).filter((id) => id !== null);
+  if (ids.length === 0) return [];
+  const rows = await select<CheckRow>(reading, `SELECT ${checkColumns} FROM process_checks WHERE id IN (?)`, [ids]);
+  const byId = new Map(rows.map((row) => [row.id, row]));
+  return nearest.map(({ title, beforeId, afterId }) => ({
+    title,
+    before: byId.get(beforeId ?? ''),
+    after: byId.get(afterId ?? ''),
+  }));
 }
 
 /** The plant's time zone, e.g. `Europe/London`; UTC before a plant is entered. */

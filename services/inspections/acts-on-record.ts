@@ -10,7 +10,7 @@ import { foundOutSince } from '@/db/repositories/equipment';
 import type { Reading } from '@/db/work';
 import type { InspectionContent } from '@/services/contracts/inspection-content';
 import type { FieldError } from '@/services/http/problem';
-import { checkStanding, type CheckStanding } from './check-covers';
+import { scopeStandings, titlesAsked, type CheckStanding } from './check-covers';
 import type { InspectionCase } from './load-case';
 import { personStanding, type PersonStanding } from './person-counts';
 import { plantDay } from './plant-day';
@@ -95,7 +95,14 @@ export async function actsOnRecord(reading: Reading, inspection: InspectionCase,
     const checks: CheckStanding[] = [];
     if (asked)
       for (const scope of inspection.asked.checks)
-        checks.push(checkStanding(scope, at ?? inspection.now, await checksAround(reading, scope, at ?? inspection.now)));
+        checks.push(
+          ...scopeStandings(
+            scope,
+            at ?? inspection.now,
+            await checksAround(reading, scope, at ?? inspection.now),
+            titlesAsked(inspection.technique?.content, scope),
+          ),
+        );
     found.push({
       act,
       at,

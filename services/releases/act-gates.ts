@@ -1,4 +1,4 @@
-import { checksAround, plantZone, type CheckRow } from '@/db/repositories/act-conditions';
+import { checksAround, plantZone, type ChecksAround } from '@/db/repositories/act-conditions';
 import { clearedInspections } from '@/db/repositories/suspects';
 import { standingInspections, type RecordedAct, type StandingInspection } from '@/db/repositories/releases';
 import type { Reading } from '@/db/work';
@@ -71,18 +71,21 @@ async function checkReasons(
   act: RecordedAct,
   say: Say,
   cleared: (cause: string) => boolean,
-  after: (scope: string, at: string) => Promise<{ before: CheckRow | undefined; after: CheckRow | undefined }>,
+  around: (scope: string, at: string) => Promise<readonly ChecksAround[]>,
 ): Promise<GateReason[]> {
   const found: GateReason[] = [];
-  for (const { scope, state } of act.checks) {
+  for (const { scope, state, check } of act.checks) {
     if (state !== 'good') found.push(say(6, 'check-not-good', `the process check of ${scope} was ${state}`, 'inspector'));
     if (act.at === null) continue;
-    const around = await after(scope, act.at);
+    const now = await around(scope, act.at);
     // A failed one may have been entered later with the time at which it was made: before the act, or after.
-    const failed = [around.before, around.after].find((check) => check?.result === 'failed' && !cleared(check.id));
-    if (failed)
-      found.push(say(6, 'check-failed-since', `the next process check of ${scope} (${failed.title}) failed`, 'reviewer'));
-    else if (around.before?.kind === 'bracketing' && !around.after)
+    const failed = now
+      .flatMap(({ before, after }) => [before, after])
+      .filter((one) => one?.result === 'failed' && !cleared(one.id));
+    for (const one of failed)
+      found.push(say(6, 'check-failed-since', `the next process check of ${scope} (${one?.title ?? ''}) failed`, 'reviewer'));
+    const own = now.find(({ title }) => title === check?.title);
+    if (failed.length === 0 && own?.before?.kind === 'bracketing' && !own.after)
       found.push(say(6, 'check-owed', `the closing process check of ${scope} is not on record`, 'inspector'));
   }
   return found;

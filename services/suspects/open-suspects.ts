@@ -34,6 +34,9 @@ export interface Failure {
   readonly until: string;
 }
 
+// A gauge used for months leaves thousands of inspections.
+const rowsAtOnce = 500;
+
 type Group = { readonly id: string; readonly requirementId: string; readonly gone: boolean };
 
 async function storeGroups(work: Work, listId: string, leaning: readonly Leaning[]): Promise<void> {
@@ -47,13 +50,21 @@ async function storeGroups(work: Work, listId: string, leaning: readonly Leaning
       ...[id, listId, requirementId],
       gone ? 1 : 0,
     ]);
-  for (const { requirementId, gone, inspectionId, partId, rests } of leaning)
-    await execute(work, 'INSERT INTO suspect_inspections (group_id, inspection_id, part_id, rests) VALUES (?, ?, ?, ?)', [
-      groups.get(`${requirementId} ${String(gone)}`)?.id,
-      inspectionId,
-      partId,
-      rests ? 1 : 0,
-    ]);
+  const rows = leaning.map(({ requirementId, gone, inspectionId, partId, rests }) => [
+    groups.get(`${requirementId} ${String(gone)}`)?.id,
+    inspectionId,
+    partId,
+    rests ? 1 : 0,
+  ]);
+  for (let from = 0; from < rows.length; from += rowsAtOnce) {
+    const some = rows.slice(from, from + rowsAtOnce);
+    const places = some.map(() => '(?, ?, ?, ?)').join(', ');
+    await execute(
+      work,
+      `INSERT INTO suspect_inspections (group_id, inspection_id, part_id, rests) VALUES ${places}`,
+      some.flat(),
+    );
+  }
 }
 
 /**

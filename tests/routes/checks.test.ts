@@ -5,6 +5,7 @@ import { closeDatabase } from '@/db/connection';
 import { newId } from '@/db/identity';
 import { databaseNow, execute, inTransaction, reading, select, sqlTimeOf } from '@/db/work';
 import { listChecks, readStandingChecks, type CheckStanding } from '@/services/contracts/checks';
+import { scopeStandings, titlesAsked } from '@/services/inspections/check-covers';
 import { call, type Person } from './inspection-setting';
 import { floor, prepareFloor } from './release-setting';
 import { bench } from './signing-setting';
@@ -132,5 +133,61 @@ describe('a process check', () => {
     const send = () => call(record, { method: 'POST', as: bench.inspector, headers, body });
     const [first, second] = [await send(), await send()];
     expect([first.status, second.status, checked(second).check.id]).toEqual([201, 201, checked(first).check.id]);
+  });
+});
+
+describe('an act leans on a scope', () => {
+  const at = '2026-03-09T10:00:00.000000Z';
+  const one = (title: string, more: object = {}) => ({
+    ...{ id: title, scope: 'booth 3', title, kind: 'opening' as const, result: 'good' as const },
+    ...{ at: '2026-03-09T06:00:00.000000Z', validUntil: '2026-03-09T14:00:00.000000Z', ...more },
+  });
+  const states = (titles: readonly string[], ...rows: ReturnType<typeof one>[]) =>
+    scopeStandings(
+      'booth 3',
+      at,
+      rows.map((before) => ({ title: before.title, before, after: undefined })),
+      titles,
+    ).map(({ state, reason }) => `${state} ${reason ?? ''}`.trim());
+
+  it('by every check that its technique asks for: a good one does not stand for a missing or lapsed one', () => {
+    const lapsed = { validUntil: '2026-03-09T09:00:00.000000Z' };
+    expect(states(['Panel', 'Light'], one('Panel'), one('Light'))).toEqual(['good', 'good']);
+    expect(states(['Panel', 'Light'], one('Light'))).toEqual([
+      'missed no process check of booth 3 (Panel) is on record before the act',
+      'good',
+    ]);
+    expect(states(['Panel', 'Light'], one('Panel', lapsed), one('Light'))).toEqual([
+      'missed the process check of booth 3 (Panel) had run out at 2026-03-09T09:00:00.000000Z',
+      'good',
+    ]);
+  });
+
+  it('by the last one where no technique asks, and never past one that stands failed', () => {
+    const early = { at: '2026-03-09T05:00:00.000000Z' };
+    expect(states([])).toEqual(['missed no process check of booth 3 is on record before the act']);
+    expect(states([], one('Panel', early), one('Light'))).toEqual(['good']);
+    const failed = { ...early, result: 'failed' };
+    expect(states([], one('Panel', failed), one('Light'))).toEqual([
+      'good',
+      'failed the process check of booth 3 (Panel) had failed before the act',
+    ]);
+    expect(states(['Light'], one('Panel', failed), one('Light')).length).toBe(2);
+  });
+
+  it('reads what a technique asks for, and nothing of what is not of its form', () => {
+    expect(
+      titlesAsked(
+        {
+          checks: [
+            { scope: 'booth 3', title: 'Panel' },
+            { scope: 'line 1', title: 'Rinse' },
+          ],
+        },
+        'booth 3',
+      ),
+    ).toEqual(['Panel']);
+    for (const content of [{}, null, undefined, { checks: 'Panel' }, { checks: [{ scope: 'booth 3' }] }])
+      expect(titlesAsked(content, 'booth 3')).toEqual([]);
   });
 });
