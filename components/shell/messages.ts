@@ -133,7 +133,7 @@ export const messages = defineMessages({
       techniques: 'Techniques',
       equipment: 'Équipements',
       personnel: 'Personnel',
-      processChecks: 'Contrôles de procédé',
+      processChecks: 'Vérifications du procédé',
       suspects: 'Listes de suspects',
       trace: 'Traçabilité',
       insight: 'Analyse',

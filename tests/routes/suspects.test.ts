@@ -11,7 +11,7 @@ import { newId } from '@/db/identity';
 import { databaseNow, execute, inTransaction, reading, select } from '@/db/work';
 import { hold as holdShape, part as partShape } from '@/services/contracts/parts';
 import { shipment as shipmentShape } from '@/services/contracts/shipments';
-import { listSuspects } from '@/services/contracts/suspects';
+import { listSuspects, suspectList } from '@/services/contracts/suspects';
 import { call, gauge, qualify, signingPassword, type Person } from './inspection-setting';
 import {
   disposing,
@@ -113,6 +113,14 @@ describe('equipment found out of tolerance', () => {
       ['40', true, 1, 'open'],
       ['40', false, 3, 'open'],
     ]);
+    const paged: string[] = [];
+    for (let after: string | null = ''; after !== null;) {
+      const query: string = `?limit=1&after=${after}`;
+      const page = suspectList.parse((await call(readList, { as: bench.auditor, params: { id: list.id }, query })).json);
+      paged.push(...page.items.map(({ part }) => part.serial));
+      after = page.next;
+    }
+    expect(paged).toEqual(list.items.map(({ part }) => part.serial));
     for (const { id } of here) expect(await held(id)).toBe(1);
     expect(await held(untouched.id)).toBe(0);
     const shown = partShape.parse((await call(readPart, { as: bench.inspector, params: { id: here[0]?.id ?? '' } })).json);
