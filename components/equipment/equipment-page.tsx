@@ -68,8 +68,9 @@ export function EquipmentPage({ mayKeep }: { mayKeep: boolean }) {
   const t = useMessages('equipment');
   const methodWords = useMethodWords();
   const [entering, setEntering] = useState(false);
-  const { filters, set } = useUrlFilters(['method', 'show'] as const);
-  const query = `${filters.method === '' ? '' : `&method=${filters.method}`}${filters.show === 'all' ? '' : '&retired=false'}`;
+  const { filters, set } = useUrlFilters(['number', 'method', 'show'] as const);
+  const find = filters.number === '' ? '' : `&number=${encodeURIComponent(filters.number)}`;
+  const query = `${find}${filters.method === '' ? '' : `&method=${filters.method}`}${filters.show === 'all' ? '' : '&retired=false'}`;
   const { rows, problem, more, busy, renew } = useKeysetList<EquipmentHead>(`/api/equipment?limit=100${query}`);
   const columns = useColumns();
   const enter = (
@@ -81,6 +82,10 @@ export function EquipmentPage({ mayKeep }: { mayKeep: boolean }) {
     <>
       <PageHeader title={t('title')} subtitle={t('subtitle')} actions={mayKeep ? enter : undefined} />
       <Toolbar label={t('show')}>
+        <label className="flex flex-col gap-1">
+          <span className="font-semibold">{t('find')}</span>
+          <input className="field font-mono" value={filters.number} onChange={(event) => set({ number: event.target.value })} />
+        </label>
         <label className="flex flex-col gap-1">
           <span className="font-semibold">{t('method')}</span>
           <select className="field" value={filters.method} onChange={(event) => set({ method: event.target.value })}>

@@ -38,17 +38,25 @@ type HeadStored = EquipmentHead & { readonly sortKey: string };
 export function equipmentAfter(
   reading: Reading,
   { day, soonDays }: DueDay,
-  filter: { readonly method?: string | undefined; readonly retired?: boolean | undefined },
+  filter: {
+    readonly method?: string | undefined;
+    readonly retired?: boolean | undefined;
+    readonly number?: string | undefined;
+  },
   limit: number,
   after: readonly [string, string] | null,
 ): Promise<HeadStored[]> {
   const [key, id] = after ?? ['', '00000000-0000-0000-0000-000000000000'];
+  const number = filter.number?.trim() ?? '';
   const retired = filter.retired === undefined ? null : filter.retired ? 1 : 0;
   return select(
     reading,
-    `SELECT * FROM (${headRows} WHERE (? IS NULL OR e.method = ?) AND (? IS NULL OR (e.retired_at IS NOT NULL) = ?)) found
+    `SELECT * FROM (${headRows} WHERE (? IS NULL OR e.method = ?) AND (? IS NULL OR (e.retired_at IS NOT NULL) = ?) AND (? = '' OR LEFT(e.number, CHAR_LENGTH(?)) = ?)) found
      WHERE sortKey >= ? AND (sortKey > ? OR id > ?) ORDER BY sortKey, id LIMIT ?`,
-    [soonDays, day, filter.method ?? null, filter.method ?? null, retired, retired, key, key, id, limit],
+    [
+      ...[soonDays, day, filter.method ?? null, filter.method ?? null, retired, retired, number, number, number],
+      ...[key, key, id, limit],
+    ],
   );
 }
 

@@ -59,7 +59,12 @@ export const listEquipment = operation({
   path: '/api/equipment',
   summary: 'Equipment: what is failed, lapsed or due soonest first, retired last.',
   changes: false,
-  query: pageQuery.extend({ method: method.optional(), retired: z.enum(['true', 'false']).optional() }),
+  query: pageQuery.extend({
+    method: method.optional(),
+    retired: z.enum(['true', 'false']).optional(),
+    /** How the number begins. */
+    number: z.string().max(40).optional(),
+  }),
   response: page(equipmentHead),
   status: 200,
 });

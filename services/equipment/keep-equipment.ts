@@ -31,11 +31,11 @@ export async function dueDay(reading: Reading): Promise<DueDay> {
 /** Equipment, what needs somebody first. */
 export async function listEquipment(
   reading: Reading,
-  { limit, after, method, retired }: QueryOf<typeof listContract>,
+  { limit, after, method, retired, number }: QueryOf<typeof listContract>,
 ): Promise<AnswerOf<typeof listContract>> {
   const key = partsOfKey(after, 2);
   const from = key && ([String(key[0]), String(key[1])] as const);
-  const filter = { method, retired: retired === undefined ? undefined : retired === 'true' };
+  const filter = { method, number, retired: retired === undefined ? undefined : retired === 'true' };
   const rows = await equipmentAfter(reading, await dueDay(reading), filter, limit + 1, from);
   return pageOf(
     rows,

@@ -49,6 +49,8 @@ describe('what must be valid for an inspection to count', () => {
     await signIn(desk, 'administrator@aldermoor.example');
     await page.goto(`${testAddress()}/equipment`, { waitUntil: 'networkidle' });
     await page.getByText('Lapsed: not to be used').first().waitFor();
+    await page.getByLabel('Number begins with').fill('UT-04');
+    await page.waitForURL(/number=UT-04/);
     await page.getByRole('link', { name: 'UT-04' }).click();
     const newest = page.getByRole('row').filter({ hasText: 'counts now' });
     const day = (await newest.locator('time').first().getAttribute('datetime')) ?? '';
@@ -95,7 +97,7 @@ describe('what must be valid for an inspection to count', () => {
     const desk = await openDesk(browser);
     const { page } = desk;
     await signIn(desk, 'reviewer@aldermoor.example');
-    await page.goto(`${testAddress()}/techniques`, { waitUntil: 'networkidle' });
+    await page.goto(`${testAddress()}/techniques?method=visual`, { waitUntil: 'networkidle' });
     await page.getByRole('link', { name: 'VI-010 issue 1' }).click();
     await page.getByRole('button', { name: 'Write the next issue' }).click();
     await page.getByRole('button', { name: 'Add a row to Process windows' }).click();
@@ -118,8 +120,8 @@ describe.each(['floor', 'reading-room', 'booth'] as const satisfies readonly Pal
     const { page } = desk;
     await signIn(desk, 'reviewer@aldermoor.example');
     const visits: readonly { path: string; link: RegExp | null; ready: string; button: RegExp | null }[] = [
-      { path: '/techniques', link: /^FP-210/, ready: 'Process windows', button: /^Write the next issue/ },
-      { path: '/equipment', link: /^UT-04/, ready: 'Calibrations', button: /^Record a calibration/ },
+      { path: '/techniques?method=penetrant', link: /^FP-210/, ready: 'Process windows', button: /^Write the next issue/ },
+      { path: '/equipment?number=UT-', link: /^UT-04/, ready: 'Calibrations', button: /^Record a calibration/ },
       { path: '/process-checks', link: null, ready: 'How they stand now', button: /^Record Known-defect panel/ },
       { path: '/suspects', link: /^Q-/, ready: 'Groups', button: /^Decide on/ },
     ];
@@ -127,16 +129,16 @@ describe.each(['floor', 'reading-room', 'booth'] as const satisfies readonly Pal
       await page.goto(`${testAddress()}${path}`, { waitUntil: 'networkidle' });
       await page.getByRole('heading', { level: 1 }).waitFor();
       expect([path, await axeFindings(page)]).toEqual([path, []]);
-      await picture(page, `${palette}${path.replaceAll('/', '-')}`);
+      await picture(page, `${palette}${path.replaceAll(/\W/g, '-')}`);
       if (link) await page.getByRole('link', { name: link }).first().click();
       await page.getByRole('heading', { name: ready }).waitFor();
       await page.waitForLoadState('networkidle');
       expect([`${path} one`, await axeFindings(page)]).toEqual([`${path} one`, []]);
-      await picture(page, `${palette}${path.replaceAll('/', '-')}-one`);
+      await picture(page, `${palette}${path.replaceAll(/\W/g, '-')}-one`);
       if (button) await page.getByRole('button', { name: button }).first().click();
       await page.getByRole('dialog').getByRole('heading').waitFor();
       expect([`${path} form`, await axeFindings(page)]).toEqual([`${path} form`, []]);
-      await picture(page, `${palette}${path.replaceAll('/', '-')}-form`);
+      await picture(page, `${palette}${path.replaceAll(/\W/g, '-')}-form`);
     }
     expectNoFaults(desk);
     await desk.context.close();

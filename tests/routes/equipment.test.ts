@@ -187,4 +187,17 @@ describe('the list', () => {
     expect(new Set(seen).size).toBe(seen.length);
     expect(seen.filter((id) => ids.includes(id))).toEqual([never, lapsed, soon, late]);
   });
+
+  it('finds by how the number begins, and takes a sign of the pattern language for itself', async () => {
+    const tag = newId().slice(-8);
+    const made = await added({ number: `A${tag}-1` });
+    const numbers = async (number: string) =>
+      listEquipment.response
+        .parse((await call(list, { as: bench.inspector, query: `?number=${encodeURIComponent(number)}` })).json)
+        .items.map(({ id }) => id);
+    expect(await numbers(`A${tag}`)).toEqual([made.id]);
+    expect(await numbers(`A${tag}-2`)).toEqual([]);
+    expect(await numbers(`A${tag.slice(0, -1)}_`)).toEqual([]);
+    expect(await numbers('%')).toEqual([]);
+  });
 });
