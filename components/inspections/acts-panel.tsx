@@ -26,7 +26,7 @@ function Checks({ checks }: { checks: InspectionAnswer['checks'] }) {
   return (
     <ul aria-label={t('checks')} className="mb-2 border-b border-line pb-2">
       {checks.map(({ scope, state, title, validUntil }) => (
-        <li key={scope} className="flex items-center gap-2">
+        <li key={`${scope} ${title ?? ''}`} className="flex items-center gap-2">
           <span className={state === 'good' ? 'text-accept' : 'text-reject'}>
             <Glyph name={state === 'good' ? 'accept' : 'reject'} />
           </span>

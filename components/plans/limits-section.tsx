@@ -11,11 +11,11 @@ const units = unitSymbols.map((symbol) => ({ value: symbol, text: symbol }));
 /** Characteristics with their bands and decision rules, attributes, and windows of process values. */
 export function LimitsSection() {
   const t = useMessages('plans');
-  const number: RowsColumn = { key: 'number', title: t('number'), kind: 'text', width: 'w-20' };
-  const title: RowsColumn = { key: 'title', title: t('title'), kind: 'text' };
-  const unit: RowsColumn = { key: 'unit', title: t('unit'), kind: 'choice', options: units, width: 'w-28' };
-  const lower: RowsColumn = { key: 'lower', title: t('lower'), kind: 'decimal', width: 'w-24' };
-  const upper: RowsColumn = { key: 'upper', title: t('upper'), kind: 'decimal', width: 'w-24' };
+  const number: RowsColumn = { key: 'number', title: t('number'), kind: 'text', width: 'min-w-20' };
+  const title: RowsColumn = { key: 'title', title: t('title'), kind: 'text', width: 'min-w-60' };
+  const unit: RowsColumn = { key: 'unit', title: t('unit'), kind: 'choice', options: units, width: 'min-w-28' };
+  const lower: RowsColumn = { key: 'lower', title: t('lower'), kind: 'decimal', width: 'min-w-24' };
+  const upper: RowsColumn = { key: 'upper', title: t('upper'), kind: 'decimal', width: 'min-w-24' };
   const rounding = (['absolute', 'rounded'] as const).map((value) => ({ value, text: t(`rounding.${value}`) }));
   return (
     <div className="flex flex-col gap-4">
@@ -30,15 +30,16 @@ export function LimitsSection() {
             number,
             title,
             unit,
-            { key: 'nominal', title: t('nominal'), kind: 'decimal', width: 'w-24' },
+            { key: 'nominal', title: t('nominal'), kind: 'decimal', width: 'min-w-24' },
             lower,
             upper,
-            { key: 'uncertaintyMax', title: t('uncertaintyMax'), kind: 'decimal', width: 'w-24' },
-            { key: 'rounding', title: t('roundingTitle'), kind: 'choice', options: rounding, width: 'w-32' },
+            { key: 'uncertaintyMax', title: t('uncertaintyMax'), kind: 'decimal', width: 'min-w-24' },
+            { key: 'rounding', title: t('roundingTitle'), kind: 'choice', options: rounding, width: 'min-w-36' },
             {
               key: 'decision',
               title: t('decision'),
               kind: 'choice',
+              width: 'min-w-64',
               cell: (row, name) => <DecisionField path={`${row}.decision`} name={name} />,
             },
           ]}

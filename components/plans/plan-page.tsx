@@ -12,7 +12,7 @@ import { Skeleton } from '@/components/ui/skeleton';
 import { StateWord } from '@/components/ui/state-word';
 import { Tabs } from '@/components/ui/tabs';
 import { When } from '@/components/ui/when';
-import type { Plan } from '@/services/contracts/plan-content';
+import type { Plan, PlanContent } from '@/services/contracts/plan-content';
 import { LimitsSection } from './limits-section';
 import { planDifferences } from './plan-differences';
 import { PlanEditingProvider } from './plan-editing';
@@ -22,7 +22,7 @@ import { RouteSection } from './route-section';
 import { RulesSection } from './rules-section';
 import { StartIssue } from './start-issue';
 import { TryOut } from './try-out';
-import { usePlanDraft } from './use-plan-draft';
+import { contentOfPlan, usePlanDraft } from './use-plan-draft';
 import { ViewsSection } from './views-section';
 
 export interface PlanPageProps {
@@ -50,7 +50,7 @@ function Signatures({ plan }: { readonly plan: Plan }) {
   );
 }
 
-function Differences({ plan, content }: { readonly plan: Plan; readonly content: Plan }) {
+function Differences({ plan, content }: { readonly plan: Plan; readonly content: PlanContent }) {
   const t = useMessages('plans');
   const others = useAnswer<{ items: Plan[] }>(`/api/drawings/${encodeURIComponent(plan.drawing)}/plans`);
   const before = others.answer?.items.find((one) => one.revision === plan.revision && one.issue === plan.issue - 1);
@@ -60,7 +60,7 @@ function Differences({ plan, content }: { readonly plan: Plan; readonly content:
   return (
     <DataTable
       caption={t('differences')}
-      rows={planDifferences(before, content)}
+      rows={planDifferences(contentOfPlan(before), content)}
       rowKey={(row) => row.path}
       empty={<EmptyState title={t('noDifferences', { issue: before.issue })} />}
       columns={[
@@ -140,7 +140,7 @@ function Issue({ plan, me, mayPrepare, mayApprove, onPlan }: PlanPageProps & { p
             {
               key: 'differences',
               title: t('differences'),
-              content: <Differences plan={plan} content={{ ...plan, ...draft.content }} />,
+              content: <Differences plan={plan} content={draft.content} />,
             },
           ]}
         />

@@ -51,7 +51,12 @@ function View({ path, place }: { readonly path: string; readonly place: number }
         <div className="flex flex-col gap-3">
           <div className="flex flex-wrap gap-2" role="group" aria-label={t('zonesOn', { view: view.title })}>
             {zones.map((zone) => (
-              <Button key={zone.place} aria-pressed={zone === chosen} onClick={() => setWanted(zone.place)}>
+              <Button
+                key={zone.place}
+                kind={zone === chosen ? 'primary' : 'quiet'}
+                aria-pressed={zone === chosen}
+                onClick={() => setWanted(zone.place)}
+              >
                 {t('zone', { id: zone.id })}
               </Button>
             ))}

@@ -23,6 +23,7 @@ export interface NavigationItem {
     | 'equipment'
     | 'personnel'
     | 'processChecks'
+    | 'suspects'
     | 'trace'
     | 'insight'
     | 'record'
@@ -46,6 +47,10 @@ export const navigation: readonly NavigationItem[] = [
   { href: '/holds', label: 'holds', group: 'judgement', roles: [...staff, 'auditor'] },
   { href: '/certificates', label: 'certificates', group: 'judgement', roles },
   { href: '/drawings', label: 'drawings', group: 'basis', roles: [...staff, 'auditor'] },
+  { href: '/techniques', label: 'techniques', group: 'basis', roles: [...judges, 'auditor'] },
+  { href: '/equipment', label: 'equipment', group: 'basis', roles: [...judges, 'auditor'] },
+  { href: '/process-checks', label: 'processChecks', group: 'basis', roles: [...staff, 'auditor'] },
+  { href: '/suspects', label: 'suspects', group: 'basis', roles: [...judges, 'auditor'] },
   { href: '/personnel', label: 'personnel', group: 'basis', roles: [...staff, 'auditor'] },
   { href: '/trace', label: 'trace', group: 'history', roles: [...staff, 'auditor'] },
   { href: '/record', label: 'record', group: 'history', roles: ['reviewer', 'administrator', 'auditor'] },

@@ -24,3 +24,7 @@ export { messages as orders } from '@/components/orders/messages';
 export { messages as customers } from '@/components/customers/messages';
 export { messages as plans } from '@/components/plans/messages';
 export { messages as record } from '@/components/record/messages';
+export { messages as equipment } from '@/components/equipment/messages';
+export { messages as suspects } from '@/components/suspects/messages';
+export { messages as checks } from '@/components/checks/messages';
+export { messages as techniques } from '@/components/techniques/messages';

@@ -1,3 +1,4 @@
+import { newerCalibration, sameFunction } from './equipment';
 import { isoOf, select, selectOne, sqlTimeOf, type Reading } from '../work';
 
 /** What must be valid for an act to count: technique, uncertainty, equipment, people, process checks. */
@@ -62,24 +63,27 @@ export interface EquipmentRow {
   readonly certificate: string | null;
 }
 
+// Of several functions and ranges the one that counts least decides: left failed, or due soonest. Takes the day twice.
 const equipmentQuery = `SELECT e.id, e.number, e.title, e.kind, e.method, e.location, c.id AS calibrationId, c.as_left AS asLeft,
   DATE_FORMAT(c.calibrated_on, '%Y-%m-%d') AS calibratedOn, DATE_FORMAT(c.due_on, '%Y-%m-%d') AS dueOn, c.certificate
   FROM equipment e LEFT JOIN calibrations c ON c.id = (
-    SELECT n.id FROM calibrations n WHERE n.equipment_id = e.id AND n.calibrated_on <= ? ORDER BY n.calibrated_on DESC, n.created_at DESC, n.id DESC LIMIT 1)`;
+    SELECT n.id FROM calibrations n WHERE n.equipment_id = e.id AND n.calibrated_on <= ? AND NOT EXISTS (
+      SELECT 1 FROM calibrations m WHERE m.equipment_id = n.equipment_id AND m.calibrated_on <= ? AND ${sameFunction('n', 'm')} AND ${newerCalibration('n', 'm')})
+    ORDER BY n.as_left = 'failed' DESC, n.due_on, n.id LIMIT 1)`;
 
 /** Equipment in use for a method, with its last calibration on or before a day. */
 export async function equipmentOfMethod(reading: Reading, method: string, day: string): Promise<EquipmentRow[]> {
   return select<EquipmentRow>(
     reading,
     `${equipmentQuery} WHERE e.method = ? AND e.retired_at IS NULL ORDER BY e.number LIMIT 300`,
-    [day, method],
+    [day, day, method],
   );
 }
 
 /** Named equipment with the calibration that counted on a day. */
 export async function equipmentByIds(reading: Reading, ids: readonly string[], day: string): Promise<EquipmentRow[]> {
   if (ids.length === 0) return [];
-  return select<EquipmentRow>(reading, `${equipmentQuery} WHERE e.id IN (?) ORDER BY e.number`, [day, [...ids]]);
+  return select<EquipmentRow>(reading, `${equipmentQuery} WHERE e.id IN (?) ORDER BY e.number`, [day, day, [...ids]]);
 }
 
 export interface AuthorisationRow {
@@ -154,23 +158,32 @@ export interface CheckRow {
 
 const checkColumns = `id, scope, title, kind, result, ${isoOf('at')} AS at, ${isoOf('valid_until')} AS validUntil`;
 
-/** The last check of a scope at or before an instant, and the first after it. */
-export async function checksAround(
-  reading: Reading,
-  scope: string,
-  at: string,
-): Promise<{ before: CheckRow | undefined; after: CheckRow | undefined }> {
-  const before = await selectOne<CheckRow>(
+/** The checks of a scope under one title that stand around an instant: the last at or before it, and the first after. */
+export interface ChecksAround {
+  readonly title: string;
+  readonly before: CheckRow | undefined;
+  readonly after: CheckRow | undefined;
+}
+
+/** The checks around an instant, title by title: a good look at the lamp says nothing about the panel. */
+export async function checksAround(reading: Reading, scope: string, at: string): Promise<ChecksAround[]> {
+  const instant = sqlTimeOf(at);
+  const nearest = await select<{ title: string; beforeId: string | null; afterId: string | null }>(
     reading,
-    `SELECT ${checkColumns} FROM process_checks WHERE scope = ? AND at <= ? ORDER BY at DESC, id DESC LIMIT 1`,
-    [scope, sqlTimeOf(at)],
+    `SELECT t.title, (SELECT b.id FROM process_checks b WHERE b.scope = ? AND b.title = t.title AND b.at <= ? ORDER BY b.at DESC, b.id DESC LIMIT 1) AS beforeId,
+       (SELECT a.id FROM process_checks a WHERE a.scope = ? AND a.title = t.title AND a.at > ? ORDER BY a.at, a.id LIMIT 1) AS afterId
+     FROM (SELECT DISTINCT title FROM process_checks WHERE scope = ?) t ORDER BY t.title`,
+    [scope, instant, scope, instant, scope],
   );
-  const after = await selectOne<CheckRow>(
-    reading,
-    `SELECT ${checkColumns} FROM process_checks WHERE scope = ? AND at > ? ORDER BY at, id LIMIT 1`,
-    [scope, sqlTimeOf(at)],
-  );
-  return { before, after };
+  const ids = nearest.flatMap(({ beforeId, afterId }) => [beforeId, afterId]).filter((id) => id !== null);
+  if (ids.length === 0) return [];
+  const rows = await select<CheckRow>(reading, `SELECT ${checkColumns} FROM process_checks WHERE id IN (?)`, [ids]);
+  const byId = new Map(rows.map((row) => [row.id, row]));
+  return nearest.map(({ title, beforeId, afterId }) => ({
+    title,
+    before: byId.get(beforeId ?? ''),
+    after: byId.get(afterId ?? ''),
+  }));
 }
 
 /** The plant's time zone, e.g. `Europe/London`; UTC before a plant is entered. */

@@ -44,14 +44,16 @@ export function findingsOfPart(reading: Reading, partId: string): Promise<Part['
   );
 }
 
-/** Open holds on the part or on any of its lots. */
+/** Open holds on the part or on any of its lots, and open suspect lists over its records. */
 export function holdsOver(reading: Reading, partId: string, lotIds: readonly string[]): Promise<Part['holds']> {
   return select(
     reading,
     `SELECT h.id, h.number, h.reason, CASE h.target_kind WHEN 'part' THEN 'part' ELSE (SELECT CONCAT(l.kind, ' ', l.number) FROM lots l WHERE l.id = h.target_id) END AS target,
        ${isoOf('h.placed_at')} AS placedAt
-     FROM holds h WHERE h.lifted_at IS NULL AND ((h.target_kind = 'part' AND h.target_id = ?) OR (h.target_kind = 'lot' AND h.target_id IN (?))) ORDER BY h.placed_at`,
-    [partId, lotIds.length > 0 ? lotIds : [partId]],
+     FROM holds h WHERE h.lifted_at IS NULL AND ((h.target_kind = 'part' AND h.target_id = ?) OR (h.target_kind = 'lot' AND h.target_id IN (?)))
+     UNION ALL SELECT g.id, s.number, s.reason, s.named AS target, ${isoOf('s.opened_at')} AS placedAt FROM suspect_inspections y JOIN suspect_groups g ON g.id = y.group_id AND g.closed_at IS NULL
+       JOIN suspect_lists s ON s.id = g.list_id WHERE y.part_id = ? AND y.rests = 1 GROUP BY s.id ORDER BY placedAt`,
+    [partId, lotIds.length > 0 ? lotIds : [partId], partId],
   );
 }
 

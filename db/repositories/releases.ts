@@ -23,7 +23,11 @@ export interface RecordedAct {
   readonly authorisation: { readonly level: string } | null;
   readonly vision: { readonly near: { readonly result: string } | null } | null;
   readonly equipment: readonly { readonly number: string; readonly asLeft: string | null; readonly dueOn: string | null }[];
-  readonly checks: readonly { readonly scope: string; readonly state: string }[];
+  readonly checks: readonly {
+    readonly scope: string;
+    readonly state: string;
+    readonly check: { readonly title: string } | null;
+  }[];
 }
 
 /** A met requirement of a part with the inspection that it rests on, as signed. */

@@ -89,7 +89,10 @@ export function decidersOfParts(reading: Reading, partIds: readonly string[]): P
   );
 }
 
-/** Equipment found out of tolerance after inspections that used it: an open suspect interval over these records. */
+/**
+ * Equipment found out of tolerance over acts that these parts rest on: since the calibration before, and not found
+ * without effect by a level 3.
+ */
 export function suspectEquipment(
   reading: Reading,
   partIds: readonly string[],
@@ -97,9 +100,13 @@ export function suspectEquipment(
   if (partIds.length === 0) return Promise.resolve([]);
   return select(
     reading,
-    `SELECT DISTINCT i.part_id AS partId, e.number AS equipment, i.number AS inspection FROM inspections i JOIN inspection_equipment u ON u.inspection_id = i.id
-     JOIN equipment e ON e.id = u.equipment_id JOIN calibrations k ON k.equipment_id = e.id AND k.as_found = 'failed' AND k.created_at > i.signed_at
-     JOIN part_requirements r ON r.part_id = i.part_id AND r.inspection_id = i.id WHERE i.part_id IN (?)`,
+    `SELECT DISTINCT i.part_id AS partId, e.number AS equipment, i.number AS inspection FROM part_requirements r JOIN inspections i ON i.id = r.inspection_id
+       JOIN inspection_leans l ON l.inspection_id = i.id AND l.kind = 'equipment' JOIN equipment e ON e.id = l.target
+       JOIN calibrations k ON k.equipment_id = e.id AND k.as_found = 'failed' AND l.at <= k.created_at AND (k.as_left = 'failed' OR l.day <= k.calibrated_on)
+     WHERE r.part_id IN (?) AND NOT EXISTS (SELECT 1 FROM calibrations g WHERE g.equipment_id = k.equipment_id AND g.created_at < k.created_at AND g.calibrated_on > l.day
+         AND (g.function = 'all' OR (g.function = k.function AND g.range_lower <=> k.range_lower AND g.range_upper <=> k.range_upper AND g.range_unit <=> k.range_unit)))
+       AND NOT EXISTS (SELECT 1 FROM suspect_lists s JOIN suspect_groups z ON z.list_id = s.id AND z.closed_how = 'no-effect' JOIN suspect_inspections y ON y.group_id = z.id
+         WHERE s.cause_id = k.id AND y.inspection_id = i.id)`,
     [partIds],
   );
 }

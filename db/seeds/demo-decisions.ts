@@ -5,6 +5,7 @@ import { placeHold } from '@/services/holds/keep-holds';
 import { signRelease } from '@/services/releases/sign-release';
 import { createShipment } from '@/services/shipments/gather-shipment';
 import { execute, inTransaction, reading, selectOne } from '../work';
+import { findGaugeOut } from './demo-equipment';
 import { inspect, type Shop } from './demo-inspections';
 import type { DemoParts } from './demo-lots';
 import { castMember, demoPassword, type Cast } from './demo-people';
@@ -76,7 +77,7 @@ async function release(context: DecisionContext, line: string, serials: readonly
   return signed.certificate;
 }
 
-/** Dispositions, a held heat, two certificates of which one is withdrawn, and a shipment that waits for its signature. */
+/** Dispositions, a gauge found out of tolerance, a held heat, two certificates of which one is withdrawn, and a shipment that waits for its signature. */
 export async function seedDecisions(context: DecisionContext): Promise<void> {
   const { people, heats, orderLines } = context;
   await decide(context);
@@ -98,4 +99,5 @@ export async function seedDecisions(context: DecisionContext): Promise<void> {
   await perform(castMember(people, 'administrator'), 'shipment-created', (work) =>
     createShipment(work, { orderLine: orderLines['TARN AM-3175'] ?? '', serials: ['B20101', 'B20102', 'B20105'] }),
   );
+  await findGaugeOut(people, context.shop.gauges);
 }

@@ -5,10 +5,11 @@ import { linkEvidence } from '@/services/inspections/link-evidence';
 import { openInspection } from '@/services/inspections/open-inspection';
 import { signInspection } from '@/services/inspections/sign-inspection';
 import { databaseNow } from '../work';
+import { measuredWithOldGauge, type Gauges } from './demo-equipment';
 import type { Pictures, Picture } from './demo-evidence';
 import type { DemoPart } from './demo-lots';
 import { stations } from './demo-plans';
-import type { Gauges } from './demo-plant';
+
 import { perform } from './perform';
 
 export type Key = 'wall' | 'visual' | 'penetrant' | 'radiograph' | 'mass' | 'marking';
@@ -67,7 +68,7 @@ const contents: Readonly<Record<Key, Content>> = {
     })),
     acts: [
       act('block-check-before', actor, at, [gauges['SB-02']], block),
-      act('measured', actor, at, [gauges['UT-07']]),
+      act('measured', actor, at, [gauges[measuredWithOldGauge.includes(serial) ? 'UT-04' : 'UT-07']]),
       act('block-check-after', actor, at, [gauges['SB-02']], block),
     ],
     examined: true,

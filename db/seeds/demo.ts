@@ -1,10 +1,12 @@
 import { selectOne, reading } from '../work';
 import { seedPictures } from './demo-evidence';
+import { seedEquipment } from './demo-equipment';
 import { seedLots, seedOrders } from './demo-lots';
 import { seedPeople } from './demo-people';
 import { seedPlans, stations } from './demo-plans';
-import { seedEquipment, seedPlant, seedTechniques } from './demo-plant';
+import { seedPlant } from './demo-plant';
 import { seedStory } from './demo-story';
+import { seedTechniques } from './demo-techniques';
 
 async function timed<T>(what: string, work: () => Promise<T>): Promise<T> {
   const began = performance.now();

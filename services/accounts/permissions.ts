@@ -25,6 +25,10 @@ export const permissions = {
     roles: ['reviewer'],
     sentence: 'Reviewers check and approve plan issues and techniques, never their own work.',
   },
+  'prepare-techniques': {
+    roles: ['reviewer', 'administrator'],
+    sentence: 'Reviewers and administrators write techniques; a level 3 of the method approves them.',
+  },
   'see-parts': { roles: readers, sentence: 'Staff and auditors find parts and lots.' },
   'enter-parts': {
     roles: ['reviewer', 'administrator'],
@@ -72,6 +76,10 @@ export const permissions = {
     sentence: 'Reviewers and administrators keep equipment and calibrations.',
   },
   'record-checks': { roles: ['inspector', 'reviewer'], sentence: 'Inspectors and reviewers record process checks.' },
+  'close-suspects': {
+    roles: ['reviewer'],
+    sentence: 'Reviewers close groups of a suspect list, never over their own inspections.',
+  },
   'see-personnel': { roles: readers, sentence: 'Staff and auditors see authorisations.' },
   'prepare-personnel': {
     roles: ['administrator', 'reviewer'],

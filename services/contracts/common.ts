@@ -86,3 +86,6 @@ export function page<Item extends z.ZodType>(item: Item) {
 
 /** Password and, where the call allows it, PIN at the moment of signing. */
 export const password = z.string().min(1, 'is needed to sign').max(200);
+
+/** An exact decimal as text, `-0.10`: no exponent, comma, blank or plus sign. */
+export const decimalText = z.string().regex(/^-?[0-9]{1,16}(?:\.[0-9]{1,16})?$/, 'must be a decimal such as 0.10');

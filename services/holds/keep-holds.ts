@@ -96,7 +96,7 @@ export async function liftHold(work: By, holdId: string, reason: string): Promis
     [work.actor.id, sqlTimeOf(work.now), reason, holdId],
   );
   if (lifted === 0) throw new Problem('state-refused', `Hold ${known.number} was already lifted.`);
-  for (const partId of partIds) await releaseIfFree(work, partId);
+  for (const partId of partIds) await holdIfReached(work, partId);
   const hold = await holdById(work, holdId);
   if (!hold) throw notFound('Hold');
   return {
@@ -114,7 +114,8 @@ export async function liftHold(work: By, holdId: string, reason: string): Promis
   };
 }
 
-async function releaseIfFree(work: Work, partId: string): Promise<void> {
+/** Takes the mark off a part that no open hold or suspect list reaches any more. */
+export async function holdIfReached(work: Work, partId: string): Promise<void> {
   const row = await selectOne<{ clusterId: string }>(work, 'SELECT cluster_id AS clusterId FROM parts WHERE id = ?', [partId]);
   if (!row) return;
   const lots = await lotsAbove(work, row.clusterId);

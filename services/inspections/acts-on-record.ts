@@ -6,10 +6,11 @@ import {
   visionOf,
   type EquipmentRow,
 } from '@/db/repositories/act-conditions';
+import { foundOutSince } from '@/db/repositories/equipment';
 import type { Reading } from '@/db/work';
 import type { InspectionContent } from '@/services/contracts/inspection-content';
 import type { FieldError } from '@/services/http/problem';
-import { checkStanding, type CheckStanding } from './check-covers';
+import { scopeStandings, titlesAsked, type CheckStanding } from './check-covers';
 import type { InspectionCase } from './load-case';
 import { personStanding, type PersonStanding } from './person-counts';
 import { plantDay } from './plant-day';
@@ -90,10 +91,18 @@ export async function actsOnRecord(reading: Reading, inspection: InspectionCase,
           )
         : null;
     const equipment = await equipmentByIds(reading, act.equipment, day);
+    const foundOut = at === null ? [] : await foundOutSince(reading, act.equipment, at, day);
     const checks: CheckStanding[] = [];
     if (asked)
       for (const scope of inspection.asked.checks)
-        checks.push(checkStanding(scope, at ?? inspection.now, await checksAround(reading, scope, at ?? inspection.now)));
+        checks.push(
+          ...scopeStandings(
+            scope,
+            at ?? inspection.now,
+            await checksAround(reading, scope, at ?? inspection.now),
+            titlesAsked(inspection.technique?.content, scope),
+          ),
+        );
     found.push({
       act,
       at,
@@ -106,6 +115,10 @@ export async function actsOnRecord(reading: Reading, inspection: InspectionCase,
         ...(person ? [] : [{ path: `${path}.person`, message: act.person ? 'is not a known person' : 'who did it is needed' }]),
         ...(standing?.reasons ?? []).map((message) => ({ path: `${path}.person`, message })),
         ...equipmentFaults(path, act, equipment, method, day),
+        ...foundOut.map(({ id, calibratedOn }) => ({
+          path: `${path}.equipment.${String(act.equipment.indexOf(id))}`,
+          message: `${equipment.find((row) => row.id === id)?.number ?? ''} was found out of tolerance on ${calibratedOn}; an act before that does not count`,
+        })),
         ...checks.flatMap(({ reason, scope }) => (reason === null ? [] : [{ path: `${path}.checks.${scope}`, message: reason }])),
       ],
     });

@@ -14,7 +14,7 @@ import { criteriaOfRequirement } from '@/services/contracts/judging-input';
 import { judgeDraft, type Judgement } from '@/services/contracts/live-judgement';
 import { neededActs } from '@/services/contracts/needed-acts';
 import { askEngine } from './ask-engine';
-import { checkStanding } from './check-covers';
+import { scopeStandings, titlesAsked } from './check-covers';
 import { describeLink } from './describe-evidence';
 import { judgingSource, loadCase, type InspectionCase } from './load-case';
 import { personStanding } from './person-counts';
@@ -58,11 +58,12 @@ async function describePeople(reading: Reading, { row, now, day }: InspectionCas
   });
 }
 
-async function describeChecks(reading: Reading, { asked, now }: InspectionCase): Promise<InspectionAnswer['checks']> {
+async function describeChecks(reading: Reading, { asked, now, technique }: InspectionCase): Promise<InspectionAnswer['checks']> {
   const found: InspectionAnswer['checks'] = [];
   for (const scope of asked.checks) {
-    const { state, check } = checkStanding(scope, now, await checksAround(reading, scope, now));
-    found.push({ scope, state, title: check?.title ?? null, at: check?.at ?? null, validUntil: check?.validUntil ?? null });
+    const around = await checksAround(reading, scope, now);
+    for (const { state, check } of scopeStandings(scope, now, around, titlesAsked(technique?.content, scope)))
+      found.push({ scope, state, title: check?.title ?? null, at: check?.at ?? null, validUntil: check?.validUntil ?? null });
   }
   return found;
 }

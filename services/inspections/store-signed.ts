@@ -1,11 +1,13 @@
 import { insert, insertAll } from '@/db/models/table';
 import { inspectionEquipment, inspectionIndications, inspectionReadings, inspections } from '@/db/repositories/inspections';
+import { keepLeans } from '@/db/repositories/leans';
 import type { Work } from '@/db/work';
 import type { EvaluationAnswer } from '@/services/contracts/evaluate';
 import { judgingInput } from '@/services/contracts/judging-input';
 import { verdictOfIndication } from './changed-after-verdict';
 import type { RecordParts } from './build-record';
 import { equipmentOfActs } from './load-case';
+import { plantDay } from './plant-day';
 
 /** Digits after the point as entered: `0.10` has two. */
 export function decimalsOf(value: string): number {
@@ -68,6 +70,21 @@ async function storeIndications(work: Work, { inspection: { draft }, evaluation 
   );
 }
 
+/** What each act leaned on, so that a failure found later finds it again. */
+async function storeLeans(work: Work, { inspection, acts, actedAt }: RecordParts): Promise<void> {
+  const { draft, technique, zone } = inspection;
+  const leans = acts.flatMap(({ at, equipment, checks }) => [
+    ...equipment.map(({ id }) => ({ kind: 'equipment' as const, target: id, at: at ?? actedAt })),
+    ...checks.map(({ scope }) => ({ kind: 'scope' as const, target: scope, at: at ?? actedAt })),
+  ]);
+  const all = technique ? [...leans, { kind: 'technique' as const, target: technique.id, at: actedAt }] : leans;
+  await keepLeans(
+    work,
+    draft.id,
+    all.map((lean) => ({ ...lean, day: plantDay(lean.at, zone) })),
+  );
+}
+
 /** Appends a signed inspection: the record's bytes and their projection into rows. */
 export async function storeSigned(
   work: Work,
@@ -109,4 +126,5 @@ export async function storeSigned(
     inspectionEquipment,
     equipmentOfActs(draft.content).map((equipmentId) => ({ inspectionId: draft.id, equipmentId })),
   );
+  await storeLeans(work, parts);
 }

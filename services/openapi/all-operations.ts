@@ -1,5 +1,7 @@
 import * as accounts from '@/services/contracts/accounts';
 import * as certificates from '@/services/contracts/certificates';
+import * as checks from '@/services/contracts/checks';
+import * as equipment from '@/services/contracts/equipment';
 import * as evaluate from '@/services/contracts/evaluate';
 import * as evidence from '@/services/contracts/evidence';
 import * as findings from '@/services/contracts/findings';
@@ -14,12 +16,15 @@ import * as personnel from '@/services/contracts/personnel';
 import * as plans from '@/services/contracts/plans';
 import * as session from '@/services/contracts/session';
 import * as shipments from '@/services/contracts/shipments';
+import * as suspects from '@/services/contracts/suspects';
+import * as techniques from '@/services/contracts/techniques';
 import * as trace from '@/services/contracts/trace';
 
 /** Every contract module that holds calls; a route whose contract is not here fails tests/routes/openapi.test.ts. */
 const modules: readonly object[] = [
   ...[accounts, certificates, evaluate, evidence, findings, health, inspections, jobs, openapi],
   ...[orders, parts, personnel, plans, session, shipments, trace],
+  ...[checks, equipment, suspects, techniques],
 ];
 
 function isOperation(value: unknown): value is Operation {

@@ -1,4 +1,5 @@
-import { checksAround, plantZone, type CheckRow } from '@/db/repositories/act-conditions';
+import { checksAround, plantZone, type ChecksAround } from '@/db/repositories/act-conditions';
+import { clearedInspections } from '@/db/repositories/suspects';
 import { standingInspections, type RecordedAct, type StandingInspection } from '@/db/repositories/releases';
 import type { Reading } from '@/db/work';
 import type { GateReason } from '@/services/contracts/shipments';
@@ -15,7 +16,7 @@ function sayOf({ operation, number }: StandingInspection): Say {
 }
 
 /** Gates 1 and 5: what stands as met rests on an accepted record that is whole, under documents that were not wrong. */
-function recordReasons(row: StandingInspection, say: Say): GateReason[] {
+function recordReasons(row: StandingInspection, say: Say, cleared: (cause: string) => boolean): GateReason[] {
   if (row.number === null || row.verdict !== 'accept')
     return [
       {
@@ -38,7 +39,7 @@ function recordReasons(row: StandingInspection, say: Say): GateReason[] {
             'reviewer',
           ),
         ]),
-    ...(row.techniqueState === 'withdrawn-for-error'
+    ...(row.techniqueState === 'withdrawn-for-error' && !cleared('technique')
       ? [say(5, 'technique-withdrawn', `technique ${row.technique ?? ''} was withdrawn for error`, 'reviewer')]
       : []),
   ];
@@ -69,16 +70,22 @@ function actReasons(act: RecordedAct, zone: string, say: Say): GateReason[] {
 async function checkReasons(
   act: RecordedAct,
   say: Say,
-  after: (scope: string, at: string) => Promise<{ before: CheckRow | undefined; after: CheckRow | undefined }>,
+  cleared: (cause: string) => boolean,
+  around: (scope: string, at: string) => Promise<readonly ChecksAround[]>,
 ): Promise<GateReason[]> {
   const found: GateReason[] = [];
-  for (const { scope, state } of act.checks) {
+  for (const { scope, state, check } of act.checks) {
     if (state !== 'good') found.push(say(6, 'check-not-good', `the process check of ${scope} was ${state}`, 'inspector'));
     if (act.at === null) continue;
-    const around = await after(scope, act.at);
-    if (around.after?.result === 'failed')
-      found.push(say(6, 'check-failed-since', `the next process check of ${scope} (${around.after.title}) failed`, 'reviewer'));
-    else if (around.before?.kind === 'bracketing' && !around.after)
+    const now = await around(scope, act.at);
+    // A failed one may have been entered later with the time at which it was made: before the act, or after.
+    const failed = now
+      .flatMap(({ before, after }) => [before, after])
+      .filter((one) => one?.result === 'failed' && !cleared(one.id));
+    for (const one of failed)
+      found.push(say(6, 'check-failed-since', `the next process check of ${scope} (${one?.title ?? ''}) failed`, 'reviewer'));
+    const own = now.find(({ title }) => title === check?.title);
+    if (failed.length === 0 && own?.before?.kind === 'bracketing' && !own.after)
       found.push(say(6, 'check-owed', `the closing process check of ${scope} is not on record`, 'inspector'));
   }
   return found;
@@ -95,10 +102,12 @@ export async function reasonsOfActs(reading: Reading, partIds: readonly string[]
     return known;
   };
   const zone = await plantZone(reading);
+  const unaffected = await clearedInspections(reading, partIds);
   for (const row of await standingInspections(reading, partIds)) {
     const say = sayOf(row);
-    const reasons = recordReasons(row, say);
-    for (const act of row.acts) reasons.push(...actReasons(act, zone, say), ...(await checkReasons(act, say, around)));
+    const cleared = (cause: string) => unaffected.has(`${row.number ?? ''} ${cause}`);
+    const reasons = recordReasons(row, say, cleared);
+    for (const act of row.acts) reasons.push(...actReasons(act, zone, say), ...(await checkReasons(act, say, cleared, around)));
     found.set(row.partId, [...(found.get(row.partId) ?? []), ...distinct(reasons)]);
   }
   return found;
