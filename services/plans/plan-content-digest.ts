@@ -11,6 +11,6 @@ export function planContentDigest(content: PlanContent): string {
 
 /** Only the content of a plan that is read with its states. */
 export function contentOf(plan: PlanContent): PlanContent {
-  const { views, criteria, route, rework, effectivity } = plan;
-  return { views, criteria, route, rework, effectivity };
+  const { views, criteria, route, rework, effectivity, derived } = plan;
+  return { views, criteria, route, rework, effectivity, ...(derived ? { derived } : {}) };
 }

@@ -1,5 +1,6 @@
 import type { PlanContent } from '@/services/contracts/plan-content';
 import { criteriaFaults } from '@/services/engine/evaluate/evaluate';
+import { derivedEntryFaults } from '@/services/engine/methods/derived-entry-faults';
 import type { FieldError } from '@/services/http/problem';
 
 function numbersOf(list: unknown, key: string): Set<string> {
@@ -82,7 +83,23 @@ export function keyOfRequirement(row: { readonly key?: string | undefined; reado
   return row.key ?? `op-${row.operation}`;
 }
 
-/** Everything that stands against checking or approving a plan, in one pass: form and meaning of criteria, route, views, rework. */
+/** Derived characteristics against the plan's criteria and the engine's list of quantities. */
+function derivedFaults(content: PlanContent): FieldError[] {
+  const rows = Array.isArray(content.criteria.characteristics) ? content.criteria.characteristics : [];
+  const characteristics = rows.map((row: unknown) => {
+    const { number, unit } = (row ?? {}) as { number?: unknown; unit?: unknown };
+    return { number: String(number), unit: String(unit) };
+  });
+  return derivedEntryFaults(content.derived ?? [], characteristics);
+}
+
+/** Everything that stands against checking or approving a plan, in one pass: form and meaning of criteria, route, views, rework, derived quantities. */
 export function planFaults(content: PlanContent): FieldError[] {
-  return [...criteriaFaults(content.criteria), ...routeFaults(content), ...viewFaults(content), ...reworkFaults(content)];
+  return [
+    ...criteriaFaults(content.criteria),
+    ...routeFaults(content),
+    ...viewFaults(content),
+    ...reworkFaults(content),
+    ...derivedFaults(content),
+  ];
 }

@@ -1,6 +1,12 @@
-/** Why a derived quantity cannot be given; each has its sentence in English and French. */
+import type { derivedEntrySentences } from '../sentences/derived-entries';
+import type { derivedRefusalSentences } from '../sentences/derived-refusals';
+
+/** The closed list of reasons; each has its sentence in English and French. */
+export type DerivedFaultCode = keyof typeof derivedEntrySentences | keyof typeof derivedRefusalSentences;
+
+/** Why a derived quantity cannot be given: a code, and what its sentence names. */
 export interface DerivedFault {
-  readonly code: string;
+  readonly code: DerivedFaultCode;
   readonly parameters: Readonly<Record<string, string | number>>;
 }
 
@@ -12,7 +18,7 @@ export function derived<Value>(value: Value): Derived<Value> {
 }
 
 export function refused(
-  code: string,
+  code: DerivedFaultCode,
   parameters: DerivedFault['parameters'] = {},
 ): { readonly ok: false; readonly fault: DerivedFault } {
   return { ok: false, fault: { code, parameters } };
