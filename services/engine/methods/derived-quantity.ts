@@ -6,7 +6,14 @@ export type Bound = 'above-zero' | 'not-below-zero' | 'any';
 /** One input of a derived quantity: what may be entered for it, and the unit that its formula counts in. */
 export type InputForm =
   | { readonly kind: 'value'; readonly name: string; readonly unit: string; readonly bound: Bound; readonly otherwise?: string }
-  | { readonly kind: 'values'; readonly name: string; readonly unit: string; readonly bound: Bound; readonly fewest: number }
+  | {
+      readonly kind: 'values';
+      readonly name: string;
+      readonly unit: string;
+      readonly bound: Bound;
+      readonly fewest: number;
+      readonly most: number;
+    }
   | { readonly kind: 'count'; readonly name: string; readonly otherwise?: string }
   | { readonly kind: 'choice'; readonly name: string; readonly options: readonly string[] }
   /** A mark that the computation itself reads, such as an indicator's. */
@@ -53,8 +60,9 @@ export function signed(name: string, unit: string, otherwise?: string): InputFor
   return { kind: 'value', name, unit, bound: 'any', ...(otherwise === undefined ? {} : { otherwise }) };
 }
 
-export function list(name: string, unit: string, bound: Bound = 'any', fewest = 1): InputForm {
-  return { kind: 'values', name, unit, bound, fewest };
+/** A list of values; `most` keeps the exact arithmetic of the longest one well under a second. */
+export function list(name: string, unit: string, bound: Bound = 'any', fewest = 1, most = 1000): InputForm {
+  return { kind: 'values', name, unit, bound, fewest, most };
 }
 
 /** The answer of a pure function as a computed result, with steps made from it. */

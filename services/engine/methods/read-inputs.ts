@@ -14,8 +14,6 @@ export interface EnteredInput {
 /** A refusal and where it lies: dotted from the entry's root, positions from 0. */
 export type PlacedFault = DerivedFault & { readonly path: string };
 
-/** Most values of one list: a long profile has some thousands. */
-const MOST_VALUES = 20_000;
 const COUNT = /^[0-9]{1,6}$/;
 
 type ReadValue = Rational | readonly Rational[] | number | string;
@@ -67,7 +65,7 @@ export function readInput(form: InputForm, input: EnteredInput, path: string): R
   if (form.kind === 'value') return readDecimals(form, input, path);
   if (form.kind === 'values') {
     if (input.value.length < form.fewest) return bad(`${path}.value`, 'too-few-values', { input: name, needed: form.fewest });
-    if (input.value.length > MOST_VALUES) return bad(`${path}.value`, 'too-many-values', { input: name, most: MOST_VALUES });
+    if (input.value.length > form.most) return bad(`${path}.value`, 'too-many-values', { input: name, most: form.most });
     return readDecimals(form, input, path);
   }
   const text = String(input.value).trim();

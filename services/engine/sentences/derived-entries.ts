@@ -5,6 +5,7 @@ export const derivedEntrySentences = {
   'quantity-unknown': { en: '{quantity} is not a derived quantity.', fr: '{quantity} n’est pas une grandeur dérivée.' },
   'input-unknown': { en: '{input} is not an input of {quantity}.', fr: '{input} n’est pas une entrée de {quantity}.' },
   'input-twice': { en: '{input} is given twice.', fr: '{input} est donné deux fois.' },
+  'input-fixed': { en: '{input} is fixed by the plan.', fr: '{input} est fixé par la gamme.' },
   'input-missing': { en: '{input} is missing.', fr: '{input} manque.' },
   'unit-of-other-quantity': { en: '{input} needs a unit of {quantity}.', fr: '{input} demande une unité de {quantity}.' },
   'unit-not-wanted': { en: '{input} has no unit.', fr: '{input} n’a pas d’unité.' },

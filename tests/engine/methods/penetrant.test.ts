@@ -110,7 +110,7 @@ describe('windows of a technique', () => {
   });
 
   test('a sound table has no fault; each fault is named where it is, all at once', () => {
-    expect(penetrantWindowFaults(technique, 'I')).toEqual([]);
+    expect(penetrantWindowFaults(technique, 'I', 'A')).toEqual([]);
     const faults = penetrantWindowFaults(
       [
         { step: 'penetrant-dwell', lower: '60', upper: '20', unit: 'min' },
@@ -120,6 +120,7 @@ describe('windows of a technique', () => {
         { step: 'rinse-pressure', lower: '1,5', upper: 'x', unit: 'psi' },
       ],
       'I',
+      'A',
     );
     expect(faults.map(({ path }) => path)).toEqual([
       'windows.0.lower',
@@ -132,12 +133,22 @@ describe('windows of a technique', () => {
       'windows.4.upper',
       ...Array.from({ length: 4 }, () => 'windows'),
     ]);
-    expect(penetrantWindowFaults(technique, 'II').map(({ message }) => message)).toEqual(['white-light has no window']);
+    expect(penetrantWindowFaults(technique, 'II', 'A').map(({ message }) => message)).toEqual(['white-light has no window']);
+  });
+
+  test('post-emulsifiable work needs its dwell, solvent removable no rinse', () => {
+    const missing = (method: 'A' | 'B' | 'C' | 'D') =>
+      penetrantWindowFaults(technique, 'I', method).map(({ message }) => message);
+    expect(missing('B')).toEqual(['emulsifier-dwell has no window']);
+    expect(missing('D')).toEqual(['remover-dwell has no window']);
+    const wiped = technique.filter(({ step }) => !step.startsWith('rinse') && !step.startsWith('drying'));
+    expect(penetrantWindowFaults(wiped, 'I', 'C')).toEqual([]);
+    expect(penetrantWindowFaults(wiped, 'I', 'A').length).toBe(3);
   });
 
   test('every suggested window is one that a technique could take', () => {
     for (const source of WINDOW_SOURCES) {
-      const faults = penetrantWindowFaults(suggestedWindows(source), 'I').filter(({ path }) => path !== 'windows');
+      const faults = penetrantWindowFaults(suggestedWindows(source), 'I', 'D').filter(({ path }) => path !== 'windows');
       expect(faults).toEqual([]);
       for (const { step } of suggestedWindows(source)) expect(PENETRANT_STEPS).toContain(step);
     }

@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { densityGPerCm3, massInVacuumG, volumeCm3 } from '@/services/engine/methods/weighing/density';
 import { compare, decimalText, multiply, ratio, subtract } from '@/services/engine/quantity/decimal';
-import { referenceJson, withoutReference } from '../../support/reference';
+import { referenceJson, referenceRows, withoutReference } from '../../support/reference';
 import { codeOf, exactly as x, figure, valueOf } from './numbers';
 
 interface Published {
@@ -30,6 +30,23 @@ describe.skipIf(withoutReference)('published weighings', () => {
       expect(figure(densityGPerCm3(given))).toBeCloseTo(one.rho_g_cm3, 7);
       expect(Math.abs(figure(volumeCm3(given)) / one.volume_cm3 - 1)).toBeLessThan(1e-7);
     }
+  });
+
+  // Handbook densities of the alloys (from memory); cast parts lie within half a percent of them.
+  test('the densities found are those of alloys', () => {
+    const { archimedes } = referenceJson<Published>('core_shift_density.json');
+    const rows = referenceRows('nickel_alloy_density.csv');
+    const alloys = ['IN718', 'MAR-M 247', 'Ti-6Al-4V'];
+    archimedes.forEach((one, place) => {
+      const handbook = Number(rows.find(({ alloy }) => alloy === alloys[place])?.density_g_cm3);
+      const found = densityGPerCm3({
+        inAirG: x(one.m_air_g),
+        inLiquidG: x(one.m_fluid_g),
+        liquidGPerCm3: x(one.rho_fluid_g_cm3),
+        airGPerCm3: x(one.rho_air),
+      });
+      expect(Math.abs(figure(found) / handbook - 1)).toBeLessThan(0.005);
+    });
   });
 });
 

@@ -11,7 +11,8 @@ import { fourWalls, opposedWalls } from './opposed-walls';
 const method = 'dimensional';
 const ZERO = ratio(0n);
 const walls = ['wall-0', 'wall-90', 'wall-180', 'wall-270'] as const;
-const wallLists = ['x-first', 'x-second', 'y-first', 'y-second'].map((name) => list(name, 'mm', 'above-zero'));
+const MOST_PAIRS = 200;
+const wallLists = ['x-first', 'x-second', 'y-first', 'y-second'].map((name) => list(name, 'mm', 'above-zero', 1, MOST_PAIRS));
 
 function fourOf(given: Given) {
   const [a = ZERO, b = ZERO, c = ZERO, d = ZERO] = walls.map((name) => given.value(name));
@@ -107,7 +108,7 @@ export const coreShiftQuantities: readonly DerivedQuantity[] = [
   {
     name: 'core-rotation-over-sections',
     method,
-    inputs: [...wallLists, list('x-pairs-at-y', 'mm'), list('y-pairs-at-x', 'mm')],
+    inputs: [...wallLists, list('x-pairs-at-y', 'mm', 'any', 1, MOST_PAIRS), list('y-pairs-at-x', 'mm', 'any', 1, MOST_PAIRS)],
     unit: '°',
     places: 6,
     source: 'least squares for shift and small rotation over half the wall differences of all sections',

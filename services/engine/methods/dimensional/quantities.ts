@@ -139,7 +139,7 @@ const shapes: readonly DerivedQuantity[] = [
   {
     name: 'circle-diameter',
     method,
-    inputs: [list('points-x', 'mm', 'any', 3), list('points-y', 'mm', 'any', 3)],
+    inputs: [list('points-x', 'mm', 'any', 3, 500), list('points-y', 'mm', 'any', 3, 500)],
     unit: 'mm',
     places: 6,
     source: 'algebraic least-squares circle (Kåsa)',

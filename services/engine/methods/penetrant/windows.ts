@@ -27,6 +27,9 @@ export type PenetrantStep = keyof typeof QUANTITIES;
 /** Fluorescent (I) or visible dye (II). Source: ASTM E1417, SAE AMS 2644. */
 export type PenetrantType = 'I' | 'II';
 
+/** Water washable, post-emulsifiable lipophilic, solvent removable, post-emulsifiable hydrophilic. Source: as the type. */
+export type PenetrantMethod = 'A' | 'B' | 'C' | 'D';
+
 /** One window of a technique. Limits belong to the window; null is open. */
 export interface PenetrantWindow {
   readonly step: string;
@@ -35,13 +38,13 @@ export interface PenetrantWindow {
   readonly unit: string;
 }
 
-const ALWAYS: readonly PenetrantStep[] = [
-  'penetrant-dwell',
-  'rinse-pressure',
-  'rinse-temperature',
-  'drying-temperature',
-  'developer-dwell',
-];
+const RINSED: readonly PenetrantStep[] = ['rinse-pressure', 'rinse-temperature', 'drying-temperature'];
+const BY_METHOD: Readonly<Record<PenetrantMethod, readonly PenetrantStep[]>> = {
+  A: RINSED,
+  B: ['emulsifier-dwell', ...RINSED],
+  C: [],
+  D: ['remover-dwell', ...RINSED],
+};
 const BY_TYPE: Readonly<Record<PenetrantType, readonly PenetrantStep[]>> = { I: ['uv-a', 'ambient-light'], II: ['white-light'] };
 
 /** Every step known here, in the order of the work. */
@@ -66,7 +69,11 @@ function limitFaults({ lower, upper }: PenetrantWindow, path: string): Fault[] {
  * quantity, limits that cannot be, and steps of the work without a window. The limits themselves are the technique's: sources
  * differ (E1417, ISO 3452-1, ISO 3059, user specifications), and the engine holds no number of its own against them.
  */
-export function penetrantWindowFaults(windows: readonly PenetrantWindow[], type: PenetrantType): Fault[] {
+export function penetrantWindowFaults(
+  windows: readonly PenetrantWindow[],
+  type: PenetrantType,
+  method: PenetrantMethod,
+): Fault[] {
   const faults = windows.flatMap((window, place): Fault[] => {
     const path = `windows.${String(place)}`;
     const quantity = quantityOf(window.step);
@@ -78,7 +85,8 @@ export function penetrantWindowFaults(windows: readonly PenetrantWindow[], type:
       ...limitFaults(window, path),
     ];
   });
-  const missing = [...ALWAYS, ...BY_TYPE[type]].filter((needed) => !windows.some(({ step }) => step === needed));
+  const needs: readonly PenetrantStep[] = ['penetrant-dwell', ...BY_METHOD[method], 'developer-dwell', ...BY_TYPE[type]];
+  const missing = needs.filter((needed) => !windows.some(({ step }) => step === needed));
   return [...faults, ...missing.map((step) => ({ path: 'windows', message: `${step} has no window` }))];
 }
 

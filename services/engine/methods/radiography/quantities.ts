@@ -5,7 +5,7 @@ import { halfValueLayers } from './attenuation';
 import { duplexResolution } from './duplex-resolution';
 import * as geometry from './geometry';
 import { indicatorOf, sensitivityPercent } from './indicators';
-import { contrastToNoise, normalisedSignalToNoise, signalToNoise } from './signal';
+import { contrastToNoise, normalisedSignalToNoise, regionSignal, signalToNoise } from './signal';
 
 const method = 'radiography';
 const spot = positive('focal-spot', 'mm');
@@ -156,6 +156,25 @@ const seen: readonly DerivedQuantity[] = [
     },
   },
   {
+    name: 'region-signal-to-noise',
+    method,
+    inputs: [list('region-grey', '1', 'any', 4, 20_000), { kind: 'count', name: 'region-width' }],
+    unit: '1',
+    places: 4,
+    source: 'ASTM E2446, E2698: mean over the deviation about the plane of the thickness',
+    compute: (given) =>
+      resultOf(
+        regionSignal({ widthPx: given.count('region-width'), values: given.values('region-grey').map(numberOf) }),
+        (region) => ({
+          value: region.signalToNoise,
+          steps: [
+            { name: 'mean-grey', value: region.mean, unit: '1' },
+            { name: 'deviation-grey', value: region.deviation, unit: '1' },
+          ],
+        }),
+      ),
+  },
+  {
     name: 'contrast-to-noise',
     method,
     inputs: [signed('mean-grey', '1'), signed('ground-mean-grey', '1'), grey('deviation-grey')],
@@ -169,7 +188,7 @@ const seen: readonly DerivedQuantity[] = [
     name: 'basic-spatial-resolution',
     method,
     inputs: [
-      list('profile', '1', 'any', 100),
+      list('profile', '1', 'any', 100, 20_000),
       positive('profile-step', 'mm'),
       { kind: 'choice', name: 'wires', options: ['darker', 'brighter'] },
     ],
