@@ -26,6 +26,8 @@ export interface GaugeInBeam {
   /** Rise of the ground over the whole line, as a share. */
   readonly slope?: number;
   readonly pairs?: number;
+  /** Fall of the ground towards both ends, as a share: the heel of the beam. */
+  readonly curve?: number;
 }
 
 /**
@@ -58,7 +60,8 @@ export function gaugeProfile(beam: GaugeInBeam): LineProfile {
   for (let place = 0; place * beam.stepMm < length * fine; place += 1) {
     const middle = Math.round((place * beam.stepMm) / fine);
     const blurred = kernel.reduce((sum, weight, n) => sum + weight * (passed[middle + n - reach] ?? 1), 0) / total;
-    const share = 1 + ((beam.slope ?? 0) * place * beam.stepMm) / (length * fine);
+    const along = (place * beam.stepMm) / (length * fine);
+    const share = 1 + (beam.slope ?? 0) * along - (beam.curve ?? 0) * (2 * along - 1) ** 2;
     values.push(ground * (blurred * share + noise() / beam.signalToNoise));
   }
   return { values, stepMm: beam.stepMm, wires: 'darker' };

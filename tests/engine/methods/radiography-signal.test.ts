@@ -156,6 +156,13 @@ describe('duplex wires', () => {
     ).toBeCloseTo(answer, 9);
   });
 
+  test('a ground that bends under the gauge is taken from the gaps beside each pair', () => {
+    for (const blurSigmaMm of [0.11, 0.18, 0.25]) {
+      const found = valueOf(duplexResolution(gaugeProfile({ blurSigmaMm, stepMm: 0.02, signalToNoise: 1e6, curve: 0.02 })));
+      expect(Math.abs(found.interpolatedMm / (Math.SQRT2 * blurSigmaMm) - 1)).toBeLessThan(0.015);
+    }
+  });
+
   test('more blur never reads as finer', () => {
     const answers = [0.06, 0.08, 0.1, 0.13, 0.17, 0.21, 0.26].map(
       (blurSigmaMm) => valueOf(duplexResolution(gaugeProfile({ blurSigmaMm, stepMm: 0.02, signalToNoise: 1e6 }))).interpolatedMm,
