@@ -12,7 +12,7 @@ import { Skeleton } from '@/components/ui/skeleton';
 import { StateWord } from '@/components/ui/state-word';
 import { Tabs } from '@/components/ui/tabs';
 import { When } from '@/components/ui/when';
-import type { Plan, PlanContent } from '@/services/contracts/plan-content';
+import { contentOf, type Plan, type PlanContent } from '@/services/contracts/plan-content';
 import { LimitsSection } from './limits-section';
 import { planDifferences } from './plan-differences';
 import { PlanEditingProvider } from './plan-editing';
@@ -22,7 +22,7 @@ import { RouteSection } from './route-section';
 import { RulesSection } from './rules-section';
 import { StartIssue } from './start-issue';
 import { TryOut } from './try-out';
-import { contentOfPlan, usePlanDraft } from './use-plan-draft';
+import { usePlanDraft } from './use-plan-draft';
 import { ViewsSection } from './views-section';
 
 export interface PlanPageProps {
@@ -60,7 +60,7 @@ function Differences({ plan, content }: { readonly plan: Plan; readonly content:
   return (
     <DataTable
       caption={t('differences')}
-      rows={planDifferences(contentOfPlan(before), content)}
+      rows={planDifferences(contentOf(before), content)}
       rowKey={(row) => row.path}
       empty={<EmptyState title={t('noDifferences', { issue: before.issue })} />}
       columns={[

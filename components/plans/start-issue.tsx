@@ -7,8 +7,7 @@ import { useMessages } from '@/components/theme/use-messages';
 import { Button } from '@/components/ui/button';
 import { ProblemNotice } from '@/components/ui/notice';
 import { problemOf, type Problem } from '@/components/ui/problem';
-import type { Plan, PlanContent } from '@/services/contracts/plan-content';
-import { contentOfPlan } from './use-plan-draft';
+import { contentOf, type Plan, type PlanContent } from '@/services/contracts/plan-content';
 
 const empty: PlanContent = { views: [], criteria: {}, route: [], rework: [], effectivity: null };
 
@@ -28,7 +27,7 @@ export function StartIssue(props: StartIssueProps) {
     setProblem(undefined);
     const { drawing, revision } = copied ? props.from : props;
     try {
-      const body = { ...(copied ? contentOfPlan(props.from) : empty), revision };
+      const body = { ...(copied ? contentOf(props.from) : empty), revision };
       const { id } = await sendJson<Plan>(`/api/drawings/${encodeURIComponent(drawing)}/plans`, { body });
       router.push(`/plans/${id}`);
     } catch (failure) {

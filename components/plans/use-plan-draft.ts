@@ -1,13 +1,9 @@
 import { useCallback, useMemo, useState } from 'react';
 import { sendJson } from '@/components/forms/send-json';
 import { problemOf, type Problem } from '@/components/ui/problem';
-import type { Plan, PlanContent } from '@/services/contracts/plan-content';
+import { contentOf, type Plan, type PlanContent } from '@/services/contracts/plan-content';
 import { typedPlanFaults } from '@/services/contracts/plan-faults';
 import type { Fault } from '@/services/engine/evaluate/fault';
-
-export function contentOfPlan({ views, criteria, route, rework, effectivity }: PlanContent): PlanContent {
-  return { views, criteria, route, rework, effectivity };
-}
 
 export interface PlanDraft {
   readonly content: PlanContent;
@@ -23,7 +19,7 @@ export interface PlanDraft {
 
 /** A draft being typed; saved on demand against the version that was read, so that nobody's work is overwritten unseen. */
 export function usePlanDraft(plan: Plan, onSaved: (plan: Plan) => void): PlanDraft {
-  const [content, setContent] = useState<PlanContent>(() => contentOfPlan(plan));
+  const [content, setContent] = useState<PlanContent>(() => contentOf(plan));
   const [changed, setChanged] = useState(false);
   const [busy, setBusy] = useState(false);
   const [problem, setProblem] = useState<Problem>();
@@ -45,7 +41,7 @@ export function usePlanDraft(plan: Plan, onSaved: (plan: Plan) => void): PlanDra
     setBusy(false);
   };
   const takeTheirs = (theirs: Plan) => {
-    setContent(contentOfPlan(theirs));
+    setContent(contentOf(theirs));
     setChanged(false);
     setProblem(undefined);
     onSaved(theirs);

@@ -57,6 +57,24 @@ export const planRework = z.strictObject({
   reopens: z.array(mark).default([]),
 });
 
+/**
+ * A characteristic whose reading is derived from raw entries. An input without a value is entered at the bench, in `unit` where
+ * it has one; with a value the plan fixes it. Quantities and inputs are the engine's list.
+ */
+const planDerivation = z.strictObject({
+  characteristic: z.string().min(1).max(24),
+  quantity: z.string().min(1).max(60),
+  inputs: z
+    .array(
+      z.strictObject({
+        name: z.string().min(1).max(60),
+        unit: z.string().max(20).optional(),
+        value: z.union([z.string().max(60), z.array(z.string().max(60)).max(2000)]).optional(),
+      }),
+    )
+    .max(20),
+});
+
 export const effectivity = z.strictObject({
   kind: z.enum(['serial', 'lot', 'date']),
   from: words(60),
@@ -73,6 +91,7 @@ export const planContent = z.strictObject({
   route: z.array(planRequirement).max(100).default([]),
   rework: z.array(planRework).max(50).default([]),
   effectivity: effectivity.nullable().default(null),
+  derived: z.array(planDerivation).max(500).optional(),
 });
 export type PlanContent = z.output<typeof planContent>;
 
@@ -96,3 +115,9 @@ export const plan = planContent.extend({
   endedReason: z.string().nullable(),
 });
 export type Plan = z.output<typeof plan>;
+
+/** Only the content of a plan that is read with its states. */
+export function contentOf(plan: PlanContent): PlanContent {
+  const { views, criteria, route, rework, effectivity, derived } = plan;
+  return { views, criteria, route, rework, effectivity, ...(derived ? { derived } : {}) };
+}

@@ -1,6 +1,7 @@
 import type { Fault } from '../engine/evaluate/fault';
 import { planContent, type PlanContent } from './plan-content';
 import { criteriaFaults } from '../engine/evaluate/evaluate';
+import { derivedEntryFaults } from '../engine/methods/derived-entry-faults';
 
 function numbersOf(list: unknown, key: string): Set<string> {
   if (!Array.isArray(list)) return new Set();
@@ -89,7 +90,23 @@ export function typedPlanFaults(content: PlanContent): Fault[] {
   return [...form, ...planFaults(content).filter(({ path }) => !form.some((one) => one.path === path))];
 }
 
-/** Everything that stands against checking or approving a plan, in one pass: form and meaning of criteria, route, views, rework. */
+/** Derived characteristics against the plan's criteria and the engine's list of quantities. */
+function derivedFaults(content: PlanContent): Fault[] {
+  const rows = Array.isArray(content.criteria.characteristics) ? content.criteria.characteristics : [];
+  const characteristics = rows.map((row: unknown) => {
+    const { number, unit } = (row ?? {}) as { number?: unknown; unit?: unknown };
+    return { number: String(number), unit: String(unit) };
+  });
+  return derivedEntryFaults(content.derived ?? [], characteristics);
+}
+
+/** Everything that stands against checking or approving a plan, in one pass: form and meaning of criteria, route, views, rework, derived quantities. */
 export function planFaults(content: PlanContent): Fault[] {
-  return [...criteriaFaults(content.criteria), ...routeFaults(content), ...viewFaults(content), ...reworkFaults(content)];
+  return [
+    ...criteriaFaults(content.criteria),
+    ...routeFaults(content),
+    ...viewFaults(content),
+    ...reworkFaults(content),
+    ...derivedFaults(content),
+  ];
 }

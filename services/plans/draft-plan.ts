@@ -4,10 +4,10 @@ import { insert } from '@/db/models/table';
 import { drawingByNumber } from '@/db/repositories/drawings';
 import { planById, planIssues } from '@/db/repositories/plans';
 import type { Actor } from '@/services/contracts/actor';
-import type { Plan, PlanContent } from '@/services/contracts/plan-content';
+import { contentOf, type Plan, type PlanContent } from '@/services/contracts/plan-content';
 import { notFound, Problem } from '@/services/http/problem';
 import type { Recorded } from '@/services/http/route';
-import { contentOf, planContentDigest } from './plan-content-digest';
+import { planContentDigest } from './plan-content-digest';
 
 /** Starts the next plan issue of a drawing's revision (the newest unless named) as a draft. */
 export async function draftPlan(

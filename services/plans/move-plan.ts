@@ -3,10 +3,10 @@ import { execute, select, sqlTimeOf, type Work } from '@/db/work';
 import { insertAll, update } from '@/db/models/table';
 import { planById, planIssues, requirements } from '@/db/repositories/plans';
 import type { Actor } from '@/services/contracts/actor';
-import type { Plan, PlanContent } from '@/services/contracts/plan-content';
+import { contentOf, type Plan, type PlanContent } from '@/services/contracts/plan-content';
 import { notFound, Problem } from '@/services/http/problem';
 import type { Recorded } from '@/services/http/route';
-import { contentOf, planContentDigest } from './plan-content-digest';
+import { planContentDigest } from './plan-content-digest';
 import { keyOfRequirement, planFaults } from '@/services/contracts/plan-faults';
 
 type By = Work & { readonly actor: Actor };

@@ -8,9 +8,3 @@ export function planContentDigest(content: PlanContent): string {
     .update(canonicalJson(JSON.parse(JSON.stringify(content))))
     .digest('hex');
 }
-
-/** Only the content of a plan that is read with its states. */
-export function contentOf(plan: PlanContent): PlanContent {
-  const { views, criteria, route, rework, effectivity } = plan;
-  return { views, criteria, route, rework, effectivity };
-}

@@ -1,10 +1,9 @@
 import { drawingByNumber } from '@/db/repositories/drawings';
 import { planById, plansOfDrawing } from '@/db/repositories/plans';
 import type { Reading } from '@/db/work';
-import type { Plan } from '@/services/contracts/plan-content';
+import { contentOf, type Plan } from '@/services/contracts/plan-content';
 import { notFound, type FieldError } from '@/services/http/problem';
 import { Raw } from '@/services/http/route';
-import { contentOf } from './plan-content-digest';
 import { planFaults } from '@/services/contracts/plan-faults';
 
 async function found(reading: Reading, planId: string): Promise<Plan> {

@@ -1,3 +1,5 @@
+import { derivedEntrySentences } from './derived-entries';
+import { derivedRefusalSentences } from './derived-refusals';
 import { indicationSentences } from './indications';
 import { readingSentences } from './readings';
 
@@ -14,7 +16,12 @@ export interface Sentence {
 /** Sentences of one area by code; `{name}` stands for a parameter. */
 export type SentenceCatalogue = Readonly<Record<string, Readonly<Record<Language, string>>>>;
 
-const SENTENCES: SentenceCatalogue = { ...readingSentences, ...indicationSentences };
+const SENTENCES: SentenceCatalogue = {
+  ...readingSentences,
+  ...indicationSentences,
+  ...derivedEntrySentences,
+  ...derivedRefusalSentences,
+};
 
 /** Writes a sentence in a language; an unknown code is written as itself, a missing parameter as its name. */
 export function renderSentence(code: string, parameters: SentenceParameters, language: Language): string {
