@@ -21,3 +21,6 @@ export const appendOnlyTables = [
   'events',
   'event_subjects',
 ] as const;
+
+/** Tables made after the first guards; each has its own triggers in the migration that made it. */
+export const laterAppendOnlyTables = ['basket_signatures', 'run_values', 'run_inspections'] as const;

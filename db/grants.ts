@@ -1,5 +1,5 @@
 import { QueryTypes, type Sequelize } from 'sequelize';
-import { appendOnlyTables } from './append-only';
+import { appendOnlyTables, laterAppendOnlyTables } from './append-only';
 
 /**
  * Gives the application's user what it needs and no more: SELECT and INSERT everywhere,
@@ -14,7 +14,7 @@ export async function grantToApplication(
     `SELECT table_name AS name FROM information_schema.tables WHERE table_schema = ? AND table_type = 'BASE TABLE'`,
     { type: QueryTypes.SELECT, replacements: [application.schema] },
   );
-  const fixed = new Set<string>([...appendOnlyTables, 'schema_migrations']);
+  const fixed = new Set<string>([...appendOnlyTables, ...laterAppendOnlyTables, 'schema_migrations']);
   for (const { name } of tables) {
     const rights =
       name === 'schema_migrations' ? 'SELECT' : fixed.has(name) ? 'SELECT, INSERT' : 'SELECT, INSERT, UPDATE, DELETE';

@@ -11,7 +11,9 @@ export type VersionedTable =
   | 'accounts'
   | 'equipment'
   | 'inspection_drafts'
-  | 'technique_issues';
+  | 'technique_issues'
+  | 'baskets'
+  | 'runs';
 
 /**
  * Takes the rows of `ids` by writing them, in id order, so that two who decide about the same rows queue instead of

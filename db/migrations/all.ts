@@ -5,7 +5,21 @@ import { inspections } from './2026-12-01-04-inspections';
 import { release } from './2026-12-01-05-release';
 import { record } from './2026-12-01-06-record';
 import { guards } from './2026-12-01-07-guards';
+import { workstations } from './2026-12-01-40-workstations';
+import { baskets } from './2026-12-01-41-baskets';
+import { runs } from './2026-12-01-42-runs';
 import type { Migration } from './migration';
 
 /** Every migration in the order it is applied. */
-export const allMigrations: readonly Migration[] = [people, plans, partsAndLots, inspections, release, record, guards];
+export const allMigrations: readonly Migration[] = [
+  people,
+  plans,
+  partsAndLots,
+  inspections,
+  release,
+  record,
+  guards,
+  workstations,
+  baskets,
+  runs,
+];
