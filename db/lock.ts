@@ -13,7 +13,8 @@ export type VersionedTable =
   | 'inspection_drafts'
   | 'technique_issues'
   | 'baskets'
-  | 'runs';
+  | 'runs'
+  | 'workstations';
 
 /**
  * Takes the rows of `ids` by writing them, in id order, so that two who decide about the same rows queue instead of

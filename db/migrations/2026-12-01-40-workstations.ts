@@ -7,7 +7,7 @@ export const workstations: Migration = {
     // The browser keeps the token in a cookie; here is only its SHA-256, so that a stolen table makes no workstation.
     `CREATE TABLE workstations (
       id UUID PRIMARY KEY, name VARCHAR(60) NOT NULL UNIQUE, place VARCHAR(80) NULL, scan_prefix VARCHAR(12) NOT NULL, token_digest CHAR(64) CHARACTER SET ascii NOT NULL UNIQUE,
-      registered_by UUID NOT NULL, registered_at DATETIME(6) NOT NULL, retired_by UUID NULL, retired_at DATETIME(6) NULL,
+      registered_by UUID NOT NULL, registered_at DATETIME(6) NOT NULL, retired_by UUID NULL, retired_at DATETIME(6) NULL, version INT NOT NULL DEFAULT 0,
       CONSTRAINT workstations_account FOREIGN KEY (registered_by) REFERENCES accounts (id))`,
     // A badge's text is kept as its SHA-256; one person may carry several over time, one at a time.
     `CREATE TABLE badges (

@@ -1,7 +1,9 @@
 import { expect } from 'vitest';
 import { POST as scanRoute } from '@/app/api/baskets/[id]/parts/route';
+import { GET as read } from '@/app/api/baskets/[id]/route';
 import { POST as signRoute } from '@/app/api/baskets/[id]/signature/route';
 import { POST as openRoute } from '@/app/api/baskets/route';
+import { PATCH as saveDraft } from '@/app/api/inspections/[id]/route';
 import { newId } from '@/db/identity';
 import { insert, insertAll } from '@/db/models/table';
 import { planById, planIssues, requirements } from '@/db/repositories/plans';
@@ -154,4 +156,47 @@ export function signWith(id: string, count: number, more: { as?: Person; body?: 
 /** Why a scan was refused. */
 export function whyOf(answer: Answer): string {
   return (answer.json as { why?: string }).why ?? '';
+}
+
+export async function reread(id: string, as: Person = shop.inspector): Promise<BasketAnswer> {
+  return basket.parse((await call(read, { as, params: { id } })).json);
+}
+
+export async function filled(count: number): Promise<{ id: string; parts: { id: string; serial: string }[] }> {
+  const [{ id }, parts] = [await openedBasket(count), await freshParts(count)];
+  for (const { serial } of parts) expect((await scanInto(id, serial)).status).toBe(201);
+  return { id, parts };
+}
+
+const crack = {
+  id: '1',
+  type: 'crack',
+  view: 'concave',
+  shape: {
+    kind: 'polyline',
+    points: [
+      [3000, 3000],
+      [5000, 3500],
+    ],
+    width: 100,
+  },
+};
+
+export async function marked(id: string, partId: string): Promise<string> {
+  const row = (await reread(id)).parts.find(({ part }) => part === partId);
+  const saved = await call(saveDraft, {
+    method: 'PATCH',
+    as: shop.inspector,
+    params: { id: row?.inspection ?? '' },
+    headers: { 'if-match': '"1"' },
+    body: { indications: [crack] },
+  });
+  expect(saved.status).toBe(200);
+  return row?.inspection ?? '';
+}
+
+export function states(partId: string) {
+  return select<{ state: string }>(reading(), 'SELECT state FROM part_requirements WHERE part_id = ? ORDER BY position', [
+    partId,
+  ]);
 }
