@@ -69,6 +69,7 @@ export const messages = defineMessages({
       people: 'People',
       customers: 'Customers',
       orders: 'Orders',
+      workstations: 'Workstations',
     },
   },
   fr: {
@@ -139,6 +140,7 @@ export const messages = defineMessages({
       people: 'Personnes',
       customers: 'Clients',
       orders: 'Commandes',
+      workstations: 'Postes de travail',
     },
   },
 });

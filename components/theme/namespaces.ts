@@ -23,3 +23,7 @@ export { messages as holds } from '@/components/holds/messages';
 export { messages as orders } from '@/components/orders/messages';
 export { messages as customers } from '@/components/customers/messages';
 export { messages as record } from '@/components/record/messages';
+export { messages as scanner } from '@/components/scanner/messages';
+export { messages as baskets } from '@/components/baskets/messages';
+export { messages as runs } from '@/components/runs/messages';
+export { messages as workstations } from '@/components/workstations/messages';

@@ -1,10 +1,11 @@
 import { benchPeople, equipmentOfMethod, plantZone } from '@/db/repositories/act-conditions';
 import { requirementsOfParts } from '@/db/repositories/parts';
 import { openRunsOf } from '@/db/repositories/runs';
-import { partsWithSerial } from '@/db/repositories/scans';
+import { approvedPlanOf, partsWithSerial } from '@/db/repositories/scans';
 import { databaseNow, type Reading } from '@/db/work';
-import type { BasketSetUp } from '@/services/contracts/baskets';
+import type { BasketSetUp, setUpBasket as contract } from '@/services/contracts/baskets';
 import { neededActs } from '@/services/contracts/needed-acts';
+import type { QueryOf } from '@/services/contracts/operation';
 import { readScan } from '@/services/contracts/scan-text';
 import { Problem } from '@/services/http/problem';
 import { plantDay } from '@/services/inspections/plant-day';
@@ -12,16 +13,33 @@ import { metStates } from '@/services/parts/recount-part';
 import { basketRefusal } from './clean-content';
 import { operationsOf } from './set-up';
 
-/** From one scanned part, what a basket of its kind can be opened for. Problem invalid-input when no part has the serial. */
-export async function offerSetUp(reading: Reading, scan: string): Promise<BasketSetUp> {
+interface Named {
+  readonly id: string | null;
+  readonly serial: string | null;
+  readonly partNumber: string;
+  readonly title: string;
+}
+
+async function named(reading: Reading, { scan, partNumber }: QueryOf<typeof contract>): Promise<Named> {
+  if (scan === undefined) {
+    const plan = partNumber === undefined ? undefined : await approvedPlanOf(reading, partNumber);
+    if (plan && partNumber !== undefined) return { id: null, serial: null, partNumber, title: plan.title };
+    throw new Problem('invalid-input', 'partNumber: has no approved plan', [
+      { path: 'partNumber', message: 'has no approved plan' },
+    ]);
+  }
   const read = readScan(scan);
   const candidates = read ? await partsWithSerial(reading, read.serial) : [];
-  const part = candidates.find(({ partNumber }) => read?.partNumber === null || partNumber === read?.partNumber);
-  if (!part) {
-    const message = `No part has the serial ${(read?.serial ?? scan).slice(0, 60)}.`;
-    throw new Problem('invalid-input', message, [{ path: 'scan', message }], { why: 'unknown' });
-  }
-  const route = (await requirementsOfParts(reading, [part.id])).get(part.id) ?? [];
+  const part = candidates.find((one) => read?.partNumber === null || one.partNumber === read?.partNumber);
+  if (part) return part;
+  const message = `No part has the serial ${(read?.serial ?? scan).slice(0, 60)}.`;
+  throw new Problem('invalid-input', message, [{ path: 'scan', message }], { why: 'unknown' });
+}
+
+/** From one scanned part or a part number, what a basket of its kind can be opened for. Problem invalid-input. */
+export async function offerSetUp(reading: Reading, query: QueryOf<typeof contract>): Promise<BasketSetUp> {
+  const part = await named(reading, query);
+  const route = part.id === null ? [] : ((await requirementsOfParts(reading, [part.id])).get(part.id) ?? []);
   const day = plantDay(await databaseNow(reading), await plantZone(reading));
   const operations: BasketSetUp['operations'] = [];
   for (const { row, asked, windows } of await operationsOf(reading, part.partNumber)) {
@@ -34,7 +52,7 @@ export async function offerSetUp(reading: Reading, scan: string): Promise<Basket
       method: row.method,
       technique: row.technique,
       refusal: basketRefusal(asked),
-      waiting: standing !== undefined && !metStates.includes(standing.state),
+      waiting: part.id === null || (standing !== undefined && !metStates.includes(standing.state)),
       windows: [...windows],
       neededActs: neededActs(row.method, false),
       indicator: asked.indicator?.required ?? null,

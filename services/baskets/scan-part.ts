@@ -93,6 +93,14 @@ async function elsewhere(work: By, serial: string, draft: Draft): Promise<Proble
   );
 }
 
+const longestWaitMs = 12 * 3600 * 1000;
+
+/** How long a scan waited in the browser for the network, in milliseconds; 0 when it did not say. */
+export function waitedMsOf(request: Request): number {
+  const waited = Number(request.headers.get('scan-waited-ms') ?? '0');
+  return Number.isInteger(waited) && waited > 0 ? Math.min(waited, longestWaitMs) : 0;
+}
+
 /** Database time less what the scan waited for the network, never before the basket was opened. */
 function scannedAt(now: string, waitedMs: number, openedAt: string): string {
   if (waitedMs === 0) return now;
@@ -113,7 +121,12 @@ async function cleanFor(work: By, basket: Basket, standing: PartRequirement, at:
  * Puts one scanned part into the basket as inspected and clean: its draft is written, the bench can open it to mark.
  * Under the part's row and then the basket's, so fifty scans of one part at once count once.
  */
-export async function scanPart(work: By, basketId: string, body: BodyOf<typeof contract>): Promise<Recorded<ScanAnswer>> {
+export async function scanPart(
+  work: By,
+  basketId: string,
+  body: BodyOf<typeof contract>,
+  waitedMs: number,
+): Promise<Recorded<ScanAnswer>> {
   const known = await basketById(work, basketId);
   if (!known) throw notFound('Basket');
   refuseOthers(known, work.actor);
@@ -131,7 +144,7 @@ export async function scanPart(work: By, basketId: string, body: BodyOf<typeof c
   if (basket.scanned >= mostParts) throw refusal('full', `A basket takes ${String(mostParts)} parts. Open another.`);
   await refuseState(work, candidate);
   const standing = await standingIn(work, basket, candidate);
-  const at = scannedAt(work.now, body.waitedMs ?? 0, basket.openedAt);
+  const at = scannedAt(work.now, waitedMs, basket.openedAt);
   const opened = await openDraft(
     work,
     { subject: { part: candidate.id }, requirement: standing.requirementId },
@@ -148,7 +161,7 @@ export async function scanPart(work: By, basketId: string, body: BodyOf<typeof c
     scan: body.scan,
     scannedAt: at,
   });
-  return answerAdded(work, basketId, candidate, opened.events, body.waitedMs ?? 0);
+  return answerAdded(work, basketId, candidate, opened.events, waitedMs);
 }
 
 async function answerAdded(

@@ -112,13 +112,14 @@ export const setUpBasket = operation({
   name: 'set-up-basket',
   method: 'GET',
   path: '/api/baskets/set-up',
-  summary: 'From one scanned part: the operations a basket of its kind can be opened for, with what each asks.',
+  summary: 'From one scanned part, or a part number: the operations a basket of its kind can be opened for, with what each asks.',
   changes: false,
-  query: z.object({ scan: z.string().min(1).max(200) }),
+  query: z.object({ scan: z.string().min(1).max(200).optional(), partNumber: z.string().min(1).max(60).optional() }),
   response: z.object({
     partNumber: z.string(),
     title: z.string(),
-    serial: z.string(),
+    /** The part that was scanned; null when only the part number was named. */
+    serial: z.string().nullable(),
     operations: z.array(
       asked.extend({
         /** Why a basket cannot be opened for it: it asks for readings or files of each part. */
@@ -191,18 +192,10 @@ export const scanPart = operation({
   method: 'POST',
   path: '/api/baskets/{id}/parts',
   summary:
-    'Add one scanned or typed part. The same part again answers `already` and changes nothing. A refusal says `why`: unknown, wrong-part, wrong-operation, already-accepted, undecided, held, elsewhere, not-inspectable.',
+    'Add one scanned or typed part. The same part again answers `already` and changes nothing. A refusal says `why`: unknown, wrong-part, wrong-operation, already-accepted, undecided, held, elsewhere, not-inspectable. A scan that waited for the network names its wait in the header Scan-Waited-Ms, so that the act is that much earlier and a repeated key stays the same request.',
   changes: true,
   params: byId,
-  body: z.strictObject({
-    scan: z.string().min(1).max(200),
-    /** Milliseconds the scan waited in the browser for the network; the act is that much earlier. */
-    waitedMs: z
-      .int()
-      .min(0)
-      .max(12 * 3600 * 1000)
-      .optional(),
-  }),
+  body: z.strictObject({ scan: z.string().min(1).max(200) }),
   response: z.object({ outcome: z.enum(['added', 'already']), part: basketPart, counts }),
   status: 201,
 });
@@ -282,3 +275,20 @@ export const closeBasket = operation({
   response: basket,
   status: 200,
 });
+
+/** What is printed on the tag of a part that leaves a basket. */
+export interface HoldTag {
+  readonly serial: string;
+  readonly revision: string;
+  readonly partNumber: string;
+  readonly basket: string;
+  readonly operation: string;
+  readonly title: string;
+  readonly inspection: string;
+  readonly verdict: 'reject' | 'indeterminate' | 'not-evaluable';
+  readonly findings: string | null;
+  readonly at: string;
+  readonly by: string;
+  /** Data Matrix of the serial: an SVG path of so many modules a side. */
+  readonly code: { readonly path: string; readonly modules: number };
+}

@@ -44,6 +44,7 @@ export const readHere = operation({
   response: z.object({
     workstation: z.object({ id, name: z.string() }).nullable(),
     scanPrefix,
+    person: id,
     sitting: z.object({ state: z.enum(['open', 'idle', 'ended', 'none']), endsAt: instant.nullable() }),
   }),
   status: 200,

@@ -40,6 +40,7 @@ export async function readHere(reading: Reading & { readonly actor: Actor }, req
   return {
     workstation: here && { id: here.id, name: here.name },
     scanPrefix: here?.scanPrefix ?? usualPrefix,
+    person: reading.actor.id,
     sitting: await sittingOf(reading, reading.actor.sessionId),
   };
 }

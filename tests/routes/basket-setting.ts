@@ -133,13 +133,13 @@ export async function openedBasket(countIn: number, more: Record<string, unknown
 export function scanInto(
   id: string,
   scan: string,
-  more: { as?: Person; body?: object; headers?: Record<string, string> } = {},
+  more: { as?: Person; headers?: Record<string, string> } = {},
 ): Promise<Answer> {
   return call(scanRoute, {
     method: 'POST',
     as: more.as ?? shop.inspector,
     params: { id },
-    body: { scan, ...more.body },
+    body: { scan },
     ...(more.headers ? { headers: more.headers } : {}),
   });
 }

@@ -114,7 +114,7 @@ describe('scanning', () => {
   it('takes a scan that waited for the network at the time it was made, never before the basket was opened', async () => {
     const [opened, [one]] = [await openedBasket(5), await freshParts(1)];
     const answer = scanPart.response.parse(
-      (await scanInto(opened.id, one?.serial ?? '', { body: { waitedMs: 3_600_000 } })).json,
+      (await scanInto(opened.id, one?.serial ?? '', { headers: { 'scan-waited-ms': '3600000' } })).json,
     );
     expect(answer.part.scannedAt).toBe(opened.openedAt);
   });

@@ -6,5 +6,5 @@ export const GET = route({
   contract,
   who: 'inspect',
   event: null,
-  call: (reading, { query }) => offerSetUp(reading, query.scan),
+  call: (reading, { query }) => offerSetUp(reading, query),
 });

@@ -1,4 +1,4 @@
-import { scanPart } from '@/services/baskets/scan-part';
+import { scanPart, waitedMsOf } from '@/services/baskets/scan-part';
 import { scanPart as contract } from '@/services/contracts/baskets';
 import { route } from '@/services/http/route';
 
@@ -6,5 +6,5 @@ export const POST = route({
   contract,
   who: 'inspect',
   event: 'basket-part-scanned',
-  call: (work, { params, body }) => scanPart(work, params.id, body),
+  call: (work, { params, body, request }) => scanPart(work, params.id, body, waitedMsOf(request)),
 });
