@@ -23,4 +23,10 @@ export const appendOnlyTables = [
 ] as const;
 
 /** Tables made after the first guards; each has its own triggers in the migration that made it. */
-export const laterAppendOnlyTables = ['inspection_leans', 'suspect_inspections'] as const;
+export const laterAppendOnlyTables = [
+  'inspection_leans',
+  'suspect_inspections',
+  'basket_signatures',
+  'run_values',
+  'run_inspections',
+] as const;

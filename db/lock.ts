@@ -11,7 +11,10 @@ export type VersionedTable =
   | 'accounts'
   | 'equipment'
   | 'inspection_drafts'
-  | 'technique_issues';
+  | 'technique_issues'
+  | 'baskets'
+  | 'runs'
+  | 'workstations';
 
 /**
  * Takes the rows of `ids` by writing them, in id order, so that two who decide about the same rows queue instead of

@@ -77,6 +77,7 @@ export const messages = defineMessages({
       people: 'People',
       customers: 'Customers',
       orders: 'Orders',
+      workstations: 'Workstations',
     },
   },
   fr: {
@@ -155,6 +156,7 @@ export const messages = defineMessages({
       people: 'Personnes',
       customers: 'Clients',
       orders: 'Commandes',
+      workstations: 'Postes de travail',
     },
   },
 });

@@ -29,7 +29,8 @@ export interface NavigationItem {
     | 'record'
     | 'people'
     | 'customers'
-    | 'orders';
+    | 'orders'
+    | 'workstations';
   group: 'work' | 'judgement' | 'basis' | 'history' | 'house';
   roles: readonly Role[];
 }
@@ -41,6 +42,8 @@ const judges = ['reviewer', 'administrator'] as const;
 export const navigation: readonly NavigationItem[] = [
   { href: '/', label: 'today', group: 'work', roles },
   { href: '/parts', label: 'parts', group: 'work', roles: [...staff, 'auditor'] },
+  { href: '/baskets', label: 'baskets', group: 'work', roles: [...staff, 'auditor'] },
+  { href: '/runs', label: 'runs', group: 'work', roles: [...staff, 'auditor'] },
   { href: '/lots', label: 'lots', group: 'work', roles: [...staff, 'auditor'] },
   { href: '/review', label: 'review', group: 'judgement', roles: ['reviewer'] },
   { href: '/shipments', label: 'shipments', group: 'judgement', roles: judges },
@@ -57,6 +60,7 @@ export const navigation: readonly NavigationItem[] = [
   { href: '/orders', label: 'orders', group: 'house', roles: [...staff, 'auditor'] },
   { href: '/customers', label: 'customers', group: 'house', roles: [...staff, 'auditor'] },
   { href: '/people', label: 'people', group: 'house', roles: ['administrator'] },
+  { href: '/workstations', label: 'workstations', group: 'house', roles: ['administrator'] },
 ];
 
 /** The items of a role, grouped, in order. */

@@ -2,6 +2,7 @@
 
 import Link from 'next/link';
 import { useState } from 'react';
+import { usePageScanner } from '@/components/scanner/page-scanner';
 import { sendJson } from '@/components/forms/send-json';
 import { useMessages } from '@/components/theme/use-messages';
 import { Button } from '@/components/ui/button';
@@ -20,6 +21,8 @@ export interface ShellUser {
 /** Who is here; the account, this workstation, and the way out. */
 export function UserMenu({ user }: { user: ShellUser }) {
   const t = useMessages('shell');
+  const scanner = useMessages('scanner');
+  const { switchPerson } = usePageScanner();
   const [leaving, setLeaving] = useState<'no' | 'yes' | 'failed'>('no');
   const about = [t(`roles.${user.role}`), user.releaseAuthority === true ? t('releaseAuthority') : '', user.customerName ?? '']
     .filter((text) => text !== '')
@@ -51,6 +54,9 @@ export function UserMenu({ user }: { user: ShellUser }) {
       <div className="my-2 border-y border-line py-2">
         <WorkstationSettings />
       </div>
+      <Button onClick={switchPerson} className="mb-2 w-full">
+        {scanner('switch')}
+      </Button>
       <Button busy={leaving === 'yes'} onClick={() => void signOut()} className="w-full">
         {leaving === 'yes' ? t('signingOut') : t('signOut')}
       </Button>

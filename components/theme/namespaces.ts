@@ -28,3 +28,7 @@ export { messages as equipment } from '@/components/equipment/messages';
 export { messages as suspects } from '@/components/suspects/messages';
 export { messages as checks } from '@/components/checks/messages';
 export { messages as techniques } from '@/components/techniques/messages';
+export { messages as scanner } from '@/components/scanner/messages';
+export { messages as baskets } from '@/components/baskets/messages';
+export { messages as runs } from '@/components/runs/messages';
+export { messages as workstations } from '@/components/workstations/messages';

@@ -7,6 +7,9 @@ import { record } from './2026-12-01-06-record';
 import { guards } from './2026-12-01-07-guards';
 import { suspects } from './2026-12-01-25-suspects';
 import { checksByTitle } from './2026-12-01-26-checks-by-title';
+import { workstations } from './2026-12-01-40-workstations';
+import { baskets } from './2026-12-01-41-baskets';
+import { runs } from './2026-12-01-42-runs';
 import type { Migration } from './migration';
 
 /** Every migration in the order it is applied. */
@@ -20,4 +23,7 @@ export const allMigrations: readonly Migration[] = [
   guards,
   suspects,
   checksByTitle,
+  workstations,
+  baskets,
+  runs,
 ];

@@ -1,4 +1,5 @@
 import { selectOne, reading } from '../work';
+import { seedBaskets } from './demo-baskets';
 import { seedPictures } from './demo-evidence';
 import { seedEquipment } from './demo-equipment';
 import { seedLots, seedOrders } from './demo-lots';
@@ -30,5 +31,6 @@ export async function seedDemo(): Promise<boolean> {
   const orderLines = await timed('orders', () => seedOrders(customers));
   const pictures = await timed('pictures', () => seedPictures(people));
   await timed('inspections, findings and releases', () => seedStory(people, parts, { gauges, pictures }, { orderLines, heats }));
+  await timed('baskets and runs', () => seedBaskets(people, plans['AM-2210'], gauges, heats['H-26-114'] ?? ''));
   return true;
 }

@@ -38,6 +38,11 @@ export const permissions = {
     roles: ['inspector', 'reviewer'],
     sentence: 'Inspectors and reviewers record and sign inspections where they are authorised.',
   },
+  'keep-workstations': {
+    roles: ['administrator'],
+    sentence: 'Administrators register workstations and issue badges.',
+  },
+  'see-workstations': { roles: readers, sentence: 'Staff and auditors see the registered workstations.' },
   'see-inspections': { roles: readers, sentence: 'Staff and auditors read inspections and their evidence.' },
   'see-evidence': {
     roles: everyone,

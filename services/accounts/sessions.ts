@@ -2,6 +2,7 @@ import { generateIdFromEntropySize, Lucia, TimeSpan } from 'lucia';
 import { sessionAdapter } from '@/db/session-adapter';
 import { accountById, actorOf } from '@/db/repositories/accounts';
 import { keepSession, sessionClock } from '@/db/repositories/sessions';
+import { beginSitting, type SittingPlace } from '@/db/repositories/sittings';
 import { inTransaction, reading, type Work } from '@/db/work';
 import type { Actor } from '@/services/contracts/actor';
 
@@ -28,12 +29,22 @@ export const lucia = new Lucia(sessionAdapter, {
 
 /**
  * Opens a session under a new id and answers the Set-Cookie value. `at` is database time. `within` is the transaction
- * that decides about it; without one the session stands alone.
+ * that decides about it; without one the session stands alone. Its sitting begins with it.
  */
-export async function openSession(accountId: string, at: string, address: string, agent: string, within?: Work): Promise<string> {
+export async function openSession(
+  accountId: string,
+  at: string,
+  address: string,
+  agent: string,
+  within?: Work,
+  sitting: SittingPlace = { workstationId: null, provenBy: 'password' },
+): Promise<string> {
   // 200 random bits.
   const sessionId = generateIdFromEntropySize(25);
-  const keep = (work: Work) => keepSession({ ...work, now: at }, { sessionId, accountId, hours: sessionHours, address, agent });
+  const keep = async (work: Work) => {
+    await keepSession({ ...work, now: at }, { sessionId, accountId, hours: sessionHours, address, agent });
+    await beginSitting({ ...work, now: at }, sessionId, accountId, sitting);
+  };
   await (within ? keep(within) : inTransaction(null, keep));
   return lucia.createSessionCookie(sessionId).serialize();
 }

@@ -1,5 +1,6 @@
 import { accountByEmail, type Account } from '@/db/repositories/accounts';
 import { endSession } from '@/db/repositories/sessions';
+import { endSittingsAt } from '@/db/repositories/sittings';
 import { inTransaction, reading, type Work } from '@/db/work';
 import { Problem } from '@/services/http/problem';
 import { passwordMatches } from './passwords';
@@ -48,9 +49,16 @@ export async function checkSignIn(attempt: Attempt): Promise<Account> {
 export async function enter(
   work: Work,
   account: Account,
-  place: { readonly address: string; readonly agent: string; readonly earlier: string | null },
+  place: {
+    readonly address: string;
+    readonly agent: string;
+    readonly earlier: string | null;
+    readonly workstationId?: string | null;
+  },
 ): Promise<string> {
   if (place.earlier !== null) await endSession(work, place.earlier);
   await rememberAttempt(work, { email: account.email, accountId: account.id, address: place.address, outcome: 'signed-in' });
-  return openSession(account.id, work.now, place.address, place.agent, work);
+  const workstationId = place.workstationId ?? null;
+  if (workstationId !== null) await endSittingsAt(work, workstationId);
+  return openSession(account.id, work.now, place.address, place.agent, work, { workstationId, provenBy: 'password' });
 }

@@ -26,3 +26,29 @@ export function inspectionSentence(subject: SignedSubject): string {
     600,
   );
 }
+
+export interface SignedBasket {
+  readonly name: string;
+  readonly basket: string;
+  readonly partNumber: string;
+  readonly operation: string;
+  readonly title: string;
+  readonly count: number;
+}
+
+/** The sentence one signature signs for a basket: shown beforehand above the list of serials and what each was found to be. */
+export function basketSentence({ name, basket, partNumber, operation, title, count }: SignedBasket): string {
+  return `I, ${name}, individually inspected each of the ${String(count)} listed parts of ${partNumber} in basket ${basket} in operation ${operation}, ${title}, and found each as recorded.`.slice(
+    0,
+    400,
+  );
+}
+
+/** What the record of one inspection of a basket says: the sentence signed, and what it said of this serial. */
+export function basketPartSentence(sentence: string, subject: SignedSubject): string {
+  const { serial, revision, planIssue, verdict } = subject;
+  return `${sentence} Serial ${serial}, revision ${revision}, by plan issue ${String(planIssue)}: ${outcome[verdict]}.`.slice(
+    0,
+    600,
+  );
+}

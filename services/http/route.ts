@@ -1,5 +1,6 @@
 import type { z } from 'zod';
 import { appendEvent, type NewEvent } from '@/db/repositories/events';
+import { touchSitting } from '@/db/repositories/sittings';
 import { inTransaction, reading, type Reading, type Work } from '@/db/work';
 import { may, permissions, type PermissionName } from '@/services/accounts/permissions';
 import type { Actor } from '@/services/contracts/actor';
@@ -139,6 +140,8 @@ async function answerChange(
   input: Input<Operation>,
 ): Promise<Response> {
   const { contract } = declaration;
+  // Whoever changes something is working: the sitting goes on.
+  if (actor?.sessionId) await touchSitting(actor.sessionId);
   const prepared = declaration.prepare ? await declaration.prepare(actor, input) : undefined;
   return inTransaction(actor, async (work) => {
     const before = await replayed(work, contract, input);

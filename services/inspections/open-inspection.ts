@@ -1,11 +1,11 @@
 import { newId } from '@/db/identity';
 import { takeRows } from '@/db/lock';
 import { insert, update } from '@/db/models/table';
-import { drafts, liveDraft } from '@/db/repositories/drafts';
+import { drafts, liveDraft, type Draft } from '@/db/repositories/drafts';
 import { partById, partRequirements, requirementsOfParts, type PartRequirement, type PartSummary } from '@/db/repositories/parts';
 import type { Work } from '@/db/work';
 import type { Actor } from '@/services/contracts/actor';
-import { inspectionContent } from '@/services/contracts/inspection-content';
+import { inspectionContent, type InspectionContent } from '@/services/contracts/inspection-content';
 import type { InspectionAnswer, RepeatReason } from '@/services/contracts/inspections';
 import { notFound, Problem } from '@/services/http/problem';
 import type { Recorded } from '@/services/http/route';
@@ -67,8 +67,25 @@ async function answered(
   return { answer, headers: { etag: `"${String(answer.version)}"`, location: `/api/inspections/${inspectionId}` } };
 }
 
-/** Opens the inspection of a part's requirement, or answers the live draft: two at once get the same one. */
-export async function openInspection(work: Work & { readonly actor: Actor }, asked: Asked): Promise<Recorded<InspectionAnswer>> {
+export interface OpenedDraft {
+  readonly draftId: string;
+  readonly part: PartSummary;
+  readonly standing: PartRequirement;
+  /** The draft was there already: nothing was written. */
+  readonly live: Draft | null;
+  /** The state before is kept here, so that giving the draft up can put it back. Empty when the draft was there. */
+  readonly events: Recorded<InspectionAnswer>['events'];
+}
+
+/**
+ * Writes the draft of a part's requirement under the part's row, or finds the live one. The content is what is known
+ * from the start. Problems: not-found, invalid-input, state-refused.
+ */
+export async function openDraft(
+  work: Work & { readonly actor: Actor },
+  asked: Asked,
+  content: InspectionContent = inspectionContent.parse({}),
+): Promise<OpenedDraft> {
   const partId = asked.subject.part;
   await takeRows(work, 'parts', [partId]);
   const part = await partById(work, partId);
@@ -80,7 +97,7 @@ export async function openInspection(work: Work & { readonly actor: Actor }, ask
       { path: 'requirement', message: 'is not a requirement of this part' },
     ]);
   const live = await liveDraft(work, partId, standing.requirementId);
-  if (live) return { ...(await answered(work, live.id)), status: 200, events: [] };
+  if (live) return { draftId: live.id, part, standing, live, events: [] };
   refusePart(part);
   refuseRequirement(standing, asked.repeatReason);
   const repeatReason = repeatReasonOf(standing, asked.repeatReason);
@@ -92,7 +109,7 @@ export async function openInspection(work: Work & { readonly actor: Actor }, ask
     cycle: standing.cycle,
     state: 'draft',
     live: 1,
-    content: inspectionContent.parse({}),
+    content,
     shownReject: false,
     repeatReason,
     openedBy: work.actor.id,
@@ -103,21 +120,24 @@ export async function openInspection(work: Work & { readonly actor: Actor }, ask
   });
   await update(work, partRequirements, { state: 'in-work' }, { partId, position: standing.position });
   await recountPart(work, partId);
+  const { operation, title, state: priorState } = standing;
   return {
-    ...(await answered(work, draftId)),
-    // The state before is kept here, so that giving the draft up can put it back.
+    draftId,
+    part,
+    standing,
+    live: null,
     events: [
       {
         subject: { kind: 'inspection', id: draftId },
         also: [{ kind: 'part', id: partId }],
-        details: {
-          serial: part.serial,
-          operation: standing.operation,
-          title: standing.title,
-          priorState: standing.state,
-          repeatReason,
-        },
+        details: { serial: part.serial, operation, title, priorState, repeatReason },
       },
     ],
   };
+}
+
+/** Opens the inspection of a part's requirement, or answers the live draft: two at once get the same one. */
+export async function openInspection(work: Work & { readonly actor: Actor }, asked: Asked): Promise<Recorded<InspectionAnswer>> {
+  const { draftId, live, events } = await openDraft(work, asked);
+  return { ...(await answered(work, draftId)), ...(live ? { status: 200 } : {}), events };
 }

@@ -15,7 +15,7 @@ import { judgingInput, type JudgingSource } from '@/services/contracts/judging-i
 import { judgeDraft, judgeInput } from '@/services/contracts/live-judgement';
 import { judgingAct } from '@/services/contracts/needed-acts';
 import type { AnswerOf } from '@/services/contracts/operation';
-import { inspectionSentence } from '@/services/contracts/signing-sentence';
+import { inspectionSentence, type SignedSubject } from '@/services/contracts/signing-sentence';
 import { notFound, Problem } from '@/services/http/problem';
 import type { Recorded } from '@/services/http/route';
 import { closeFollowedUp } from '@/services/findings/close-followed-up';
@@ -73,7 +73,15 @@ async function takeCase(work: By, inspectionId: string, ifMatch: number | null):
   return inspection;
 }
 
-async function signable(work: By, inspection: InspectionCase): Promise<Omit<RecordParts, 'number'>> {
+/** The sentence that is signed for a case, when it is not the one of a single inspection. */
+type Words = (subject: SignedSubject) => string;
+
+/** Checks a case under its rows: everything that goes into the record but its number. Problem not-signable with every reason. */
+export async function signable(
+  work: By,
+  inspection: InspectionCase,
+  words: Words = inspectionSentence,
+): Promise<Omit<RecordParts, 'number'>> {
   const { draft, part, plan, row } = inspection;
   const source: JudgingSource = await judgingSource(work, inspection, draft.content);
   const judgement = judgeDraft(source, askEngine);
@@ -90,7 +98,7 @@ async function signable(work: By, inspection: InspectionCase): Promise<Omit<Reco
   }
   const actedAt = instantOf(judgingAct(draft.content.acts)?.at) ?? work.now;
   const { serial, partNumber, revision } = part;
-  const sentence = inspectionSentence({
+  const sentence = words({
     name: work.actor.name,
     serial,
     partNumber,
@@ -137,18 +145,14 @@ async function findingOf(work: By, { inspection, evaluation, source }: RecordPar
   ];
 }
 
+type Signed = Recorded<AnswerOf<typeof contract>>;
+
 /**
- * Signs an inspection: re-reads the draft under the part's row, refuses with every reason at once, else appends the
- * record and moves requirement, finding and part counters. Problems: not-found, state-refused, changed-meanwhile, not-signable.
+ * Appends the record of a checked case and moves draft, requirement, finding and part counters; answers what was signed
+ * with its events. Call under the rows of the part and the draft. Problems: state-refused, not-signable.
  */
-export async function signInspection(
-  work: By,
-  inspectionId: string,
-  ifMatch: number | null,
-): Promise<Recorded<AnswerOf<typeof contract>>> {
-  const inspection = await takeCase(work, inspectionId, ifMatch);
-  const checked = await signable(work, inspection);
-  const { draft, part, row, standing } = inspection;
+export async function signChecked(work: By, checked: Omit<RecordParts, 'number'>): Promise<Signed> {
+  const { draft, part, row, standing } = checked.inspection;
   if (!(await endDraft(work, draft.id, 'signed'))) throw new Problem('state-refused', 'This inspection was ended meanwhile.');
   const parts: RecordParts = { ...checked, number: await nextNumber(work, 'I') };
   const record = await buildRecord(work, parts);
@@ -201,4 +205,13 @@ export async function signInspection(
       })),
     ],
   };
+}
+
+/**
+ * Signs an inspection: re-reads the draft under the part's row, refuses with every reason at once, else appends the
+ * record and moves requirement, finding and part counters. Problems: not-found, state-refused, changed-meanwhile, not-signable.
+ */
+export async function signInspection(work: By, inspectionId: string, ifMatch: number | null): Promise<Signed> {
+  const inspection = await takeCase(work, inspectionId, ifMatch);
+  return signChecked(work, await signable(work, inspection));
 }

@@ -121,7 +121,7 @@ describe('the PIN', () => {
   const actor = async (who: Person) => {
     const account = await accountById(reading(), who.id);
     if (!account) throw new Error('no account');
-    return actorOf(account, null);
+    return actorOf(account, /ringtrue-session=([^;]+)/.exec(who.cookie)?.[1] ?? null);
   };
   const refusal = async (who: Person, proof: { pin?: string; password?: string }): Promise<string | null> => {
     try {

@@ -12,6 +12,8 @@ describe('the pages that a role is shown', () => {
     expect(paths('auditor')).toEqual([
       '/',
       '/parts',
+      '/baskets',
+      '/runs',
       '/lots',
       '/holds',
       '/certificates',

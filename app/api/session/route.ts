@@ -4,19 +4,24 @@ import { checkSignIn, enter } from '@/services/accounts/sign-in';
 import { readSession, signIn, signOut } from '@/services/contracts/session';
 import { callerAddress } from '@/services/http/caller-address';
 import { route } from '@/services/http/route';
+import { workstationOfRequest } from '@/services/workstations/workstation-of-request';
 
 export const POST = route({
   contract: signIn,
   who: 'anyone',
   event: 'signed-in',
-  prepare: (_actor, { body, request }) => checkSignIn({ ...body, address: callerAddress(request) }),
-  call: async (work, { request }, account) => ({
+  prepare: async (_actor, { body, request }) => ({
+    account: await checkSignIn({ ...body, address: callerAddress(request) }),
+    workstation: await workstationOfRequest(request),
+  }),
+  call: async (work, { request }, { account, workstation }) => ({
     answer: undefined,
     headers: {
       'set-cookie': await enter(work, account, {
         address: callerAddress(request),
         agent: request.headers.get('user-agent') ?? '',
         earlier: sessionIdOf(request),
+        workstationId: workstation?.id ?? null,
       }),
     },
     events: [{ subject: { kind: 'account', id: account.id }, details: {} }],

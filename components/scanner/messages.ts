@@ -1,0 +1,36 @@
+import { defineMessages } from '@/components/theme/define-messages';
+
+export const messages = defineMessages({
+  en: {
+    switch: 'Change persons',
+    email: 'E-mail',
+    orBadge: 'or scan the badge',
+    badgeRead: 'Badge read.',
+    pin: 'PIN',
+    go: 'Take the place',
+    cancel: 'Cancel',
+    signIn: 'Sign in with the password',
+    notRegistered: 'This browser is not a registered workstation.',
+    notRegisteredHint: 'Badge and PIN count only where an administrator registered the place.',
+    leaveTitle: 'Leave this inspection for {serial}?',
+    leave: 'A code was scanned at the bench. What you entered here is saved as a draft.',
+    leaveGo: 'Go to {serial}',
+    stay: 'Stay here',
+  },
+  fr: {
+    switch: 'Changer de personne',
+    email: 'E-mail',
+    orBadge: 'ou lire le badge',
+    badgeRead: 'Badge lu.',
+    pin: 'Code PIN',
+    go: 'Prendre la place',
+    cancel: 'Annuler',
+    signIn: 'Se connecter par mot de passe',
+    notRegistered: 'Ce navigateur n’est pas un poste enregistré.',
+    notRegisteredHint: 'Badge et code PIN ne valent que là où un administrateur a enregistré le poste.',
+    leaveTitle: 'Quitter ce contrôle pour {serial} ?',
+    leave: 'Un code a été lu à l’établi. Ce que vous avez saisi ici est gardé en brouillon.',
+    leaveGo: 'Aller à {serial}',
+    stay: 'Rester ici',
+  },
+});
