@@ -71,11 +71,11 @@ async function seedParts(people: Cast, plan: Plan, heat: string): Promise<void> 
 }
 
 const values = [
-  { number: 'P1', value: '30', unit: 'min' },
-  { number: 'P2', value: '210', unit: 'kPa' },
-  { number: 'P3', value: '60', unit: '°C' },
-  { number: 'P4', value: '1850', unit: 'µW/cm²' },
-  { number: 'P5', value: '8', unit: 'lx' },
+  { number: 'W1', value: '30', unit: 'min' },
+  { number: 'W2', value: '210', unit: 'kPa' },
+  { number: 'W3', value: '60', unit: '°C' },
+  { number: 'W4', value: '1850', unit: 'µW/cm²' },
+  { number: 'W5', value: '8', unit: 'lx' },
 ];
 
 async function seedRun(people: Cast): Promise<string> {

@@ -43,6 +43,8 @@ const techniques = [
         { title: 'Penetrant dwell', unit: 'min', lower: '20', upper: '60' },
         { title: 'Rinse pressure', unit: 'kPa', upper: '275' },
         { title: 'Dryer temperature', unit: '°C', upper: '71' },
+        { title: 'UV-A irradiance at the part', unit: 'µW/cm²', lower: '1000' },
+        { title: 'Ambient light', unit: 'lx', upper: '20' },
       ],
       views: ['concave', 'convex', 'platform', 'root'],
       checks: [
