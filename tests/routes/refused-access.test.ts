@@ -10,7 +10,15 @@ const root = path.resolve(import.meta.dirname, '../..');
 const methods = ['GET', 'POST', 'PUT', 'PATCH', 'DELETE'] as const;
 
 /** The only calls a stranger may make. Adding one here is a decision about what the world may know. */
-const openToStrangers = ['sign-in', 'badge-in', 'read-health', 'read-openapi', 'verify-certificate', 'verify-file', 'verify-digest'];
+const openToStrangers = [
+  'sign-in',
+  'badge-in',
+  'read-health',
+  'read-openapi',
+  'verify-certificate',
+  'verify-file',
+  'verify-digest',
+];
 
 interface Routed {
   readonly file: string;
