@@ -48,11 +48,10 @@ function Tag({ tag }: { tag: HoldTag }) {
           <path d={tag.code.path} fill="currentColor" />
         </svg>
       </div>
-      <p className="flex justify-between gap-2 border-t border-ink pt-[1mm] text-sm leading-tight">
-        <span>
-          {tag.by}, <When at={tag.at} />
-        </span>
-        <span className="font-mono whitespace-nowrap">
+      <p className="border-t border-ink pt-[1mm] text-sm leading-tight">
+        {tag.by}, <When at={tag.at} />
+        <br />
+        <span className="font-mono">
           {tag.inspection} · {tag.basket}
         </span>
       </p>

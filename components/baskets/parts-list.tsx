@@ -67,18 +67,15 @@ function Row({ basket, part, writable, onTakeOut }: RowProps) {
       <span className="flex gap-2">
         {part.number !== null && leaves(part) ? (
           <LinkButton size="capture" href={`/baskets/${basket.id}/tags#${part.serial}`}>
-            {t('tag')}
+            {t('tag')} <span className="sr-only">{part.serial}</span>
           </LinkButton>
         ) : null}
         <LinkButton size="capture" href={`/inspections/${part.inspection}`}>
-          <span aria-hidden>{writable && inBasket ? t('mark') : t('look1')}</span>
-          <span className="sr-only">
-            {writable && inBasket ? t('markOf', { serial: part.serial }) : t('lookOf', { serial: part.serial })}
-          </span>
+          {writable && inBasket ? t('mark') : t('look1')} <span className="sr-only">{part.serial}</span>
         </LinkButton>
         {writable && inBasket ? (
-          <Button size="capture" aria-label={t('takeOutOf', { serial: part.serial })} onClick={() => onTakeOut(part)}>
-            {t('takeOut')}
+          <Button size="capture" onClick={() => onTakeOut(part)}>
+            {t('takeOut')} <span className="sr-only">{part.serial}</span>
           </Button>
         ) : null}
       </span>

@@ -4,7 +4,9 @@ import { useCallback, useState } from 'react';
 import { playTone, type Tone } from '@/components/scanner/tones';
 import { useAnswer } from '@/components/theme/use-answer';
 import type { BasketAnswer, BasketPart } from '@/services/contracts/baskets';
-import { useScanQueue, type ScanEnd, type ScanQueue } from './use-scan-queue';
+import { basketSentence } from '@/services/contracts/signing-sentence';
+import type { ScanEnd } from './scan-sender';
+import { useScanQueue, type ScanQueue } from './use-scan-queue';
 
 /** What the last scan came to: its tone, the name of its word, the serial or code, and a sentence where there is more to say. */
 export interface LastScan {
@@ -26,9 +28,13 @@ export interface BasketDesk {
 // Marks made at the bench, and what another tab scanned, are seen within this time.
 const lookAgainMs = 10_000;
 
+/** The basket as the server will answer it next: the sentence names the count that is now scanned. */
 function withPart(answer: BasketAnswer, part: BasketPart, counts: BasketAnswer['counts']): BasketAnswer {
   const others = answer.parts.filter(({ inspection }) => inspection !== part.inspection);
-  return { ...answer, counts, parts: [...others, part] };
+  const { evaluator, number, partNumber, requirement } = answer;
+  const { operation, title } = requirement;
+  const sentence = basketSentence({ name: evaluator.name, basket: number, partNumber, operation, title, count: counts.scanned });
+  return { ...answer, counts, sentence, parts: [...others, part] };
 }
 
 /** A refused scan of another part number has the rough tone, one that names nothing the low one. */

@@ -18,9 +18,16 @@ interface Listening {
   readonly listen: (events: ScannerEvents) => () => void;
   readonly switchPerson: () => void;
   readonly here: Here | undefined;
+  /** This browser has just become a workstation. */
+  readonly renewHere: () => Promise<unknown>;
 }
 
-const nobody: Listening = { listen: () => () => undefined, switchPerson: () => undefined, here: undefined };
+const nobody: Listening = {
+  listen: () => () => undefined,
+  switchPerson: () => undefined,
+  here: undefined,
+  renewHere: () => Promise.resolve(),
+};
 const ScannerContext = createContext<Listening>(nobody);
 
 export function usePageScanner(): Listening {
@@ -34,9 +41,15 @@ export function useScans(events: ScannerEvents): void {
   useEffect(() => {
     latest.current = events;
   });
+  const takesBadges = events.onBadge !== undefined;
   useEffect(
-    () => listen({ onScan: (text) => latest.current.onScan(text), onBroken: () => latest.current.onBroken?.() }),
-    [listen],
+    () =>
+      listen({
+        onScan: (text) => latest.current.onScan(text),
+        onBroken: () => latest.current.onBroken?.(),
+        ...(takesBadges ? { onBadge: (text: string) => latest.current.onBadge?.(text) } : {}),
+      }),
+    [listen, takesBadges],
   );
 }
 
@@ -50,7 +63,7 @@ export function PageScanner({ children }: { children: ReactNode }) {
   const t = useMessages('scanner');
   const router = useRouter();
   const path = usePathname();
-  const { answer: here } = useAnswer<Here>('/api/workstations/here', 60_000);
+  const { answer: here, renew } = useAnswer<Here>('/api/workstations/here', 60_000);
   const page = useRef<ScannerEvents | null>(null);
   const [badge, setBadge] = useState<string | null>(null);
   const [asked, setAsked] = useState<string | null>(null);
@@ -61,8 +74,10 @@ export function PageScanner({ children }: { children: ReactNode }) {
   const open = (text: string) => router.push(`/parts?serial=${encodeURIComponent(serialOf(text))}`);
   useScanner(here?.scanPrefix ?? usualPrefix, {
     onScan: (text) => {
-      if (isBadge(text)) setBadge(text);
-      else if (page.current) page.current.onScan(text);
+      if (isBadge(text)) {
+        if (page.current?.onBadge) page.current.onBadge(text);
+        else setBadge(text);
+      } else if (page.current) page.current.onScan(text);
       else if (path.startsWith('/inspections/')) setAsked(text);
       else open(text);
     },
@@ -78,8 +93,9 @@ export function PageScanner({ children }: { children: ReactNode }) {
       },
       switchPerson: () => setBadge(''),
       here,
+      renewHere: () => renew(),
     }),
-    [here],
+    [here, renew],
   );
   return (
     <ScannerContext.Provider value={value}>

@@ -12,6 +12,8 @@ export interface ScannerEvents {
   readonly onScan: (text: string) => void;
   /** A code began and did not end: the scan is to be made again. */
   readonly onBroken?: () => void;
+  /** Where badges are given out, one is read rather than used. */
+  readonly onBadge?: (text: string) => void;
 }
 
 /**

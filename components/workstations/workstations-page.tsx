@@ -9,7 +9,7 @@ import { sendJson } from '@/components/forms/send-json';
 import { SubmitButton } from '@/components/forms/submit-button';
 import { TextField } from '@/components/forms/text-field';
 import { badgeStart } from '@/components/scanner/badge-text';
-import { usePageScanner } from '@/components/scanner/page-scanner';
+import { usePageScanner, useScans } from '@/components/scanner/page-scanner';
 import { useAnswer } from '@/components/theme/use-answer';
 import { useMessages } from '@/components/theme/use-messages';
 import { Button } from '@/components/ui/button';
@@ -24,12 +24,13 @@ import { scanPrefix, usualPrefix, type Workstation } from '@/services/contracts/
 
 function RegisterForm({ onDone }: { onDone: () => void }) {
   const t = useMessages('workstations');
-  const { here } = usePageScanner();
+  const { here, renewHere } = usePageScanner();
   const form = useProblemForm({
     initialValues: { name: '', place: '', scanPrefix: usualPrefix as string },
     validationSchema: object({ name: string().trim().required(t('nameNeeded')) }),
     onSubmit: async ({ name, place, scanPrefix: prefix }) => {
       await sendJson('/api/workstations', { body: { name, scanPrefix: prefix, ...(place.trim() === '' ? {} : { place }) } });
+      await renewHere();
       onDone();
     },
   });
@@ -71,6 +72,7 @@ function BadgeForm() {
       resetForm();
     },
   });
+  useScans({ onScan: () => undefined, onBadge: (text) => void form.formik.setFieldValue('badge', text) });
   const options = (people?.items ?? []).filter(({ disabledAt }) => disabledAt === null);
   return (
     <Panel title={t('badges')} subtitle={t('badgesHint', { start: badgeStart })}>

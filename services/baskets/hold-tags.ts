@@ -1,4 +1,5 @@
-import { basketById, tagsOf } from '@/db/repositories/baskets';
+import { basketById } from '@/db/repositories/baskets';
+import { tagsOf } from '@/db/repositories/hold-tags';
 import { reading } from '@/db/work';
 import type { HoldTag } from '@/services/contracts/baskets';
 import { dataMatrixOutline } from '@/services/labels/data-matrix';

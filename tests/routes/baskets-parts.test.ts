@@ -4,7 +4,9 @@ import { POST as removal } from '@/app/api/baskets/[id]/parts/[part]/removal/rou
 import { PATCH as change } from '@/app/api/baskets/[id]/route';
 import { POST as split } from '@/app/api/baskets/[id]/split/route';
 import { POST as signAlone } from '@/app/api/inspections/[id]/signature/route';
+import { newId } from '@/db/identity';
 import { reading, select } from '@/db/work';
+import { readHoldTags } from '@/services/baskets/hold-tags';
 import { basket, signBasket } from '@/services/contracts/baskets';
 import {
   filled,
@@ -32,6 +34,11 @@ describe('a part that is not clean', () => {
     const rejected = signed.inspections.find((one) => one.inspection === inspection);
     expect([rejected?.verdict, rejected?.findings.length]).toEqual(['reject', 1]);
     expect((await states(parts[0]?.id ?? ''))[1]?.state).toBe('rejected');
+    const tags = (await readHoldTags(id))?.tags ?? [];
+    expect(tags.map(({ serial, verdict, findings }) => [serial, verdict, findings])).toEqual([
+      [parts[0]?.serial, 'reject', rejected?.findings[0]?.number],
+    ]);
+    expect(await readHoldTags(newId())).toBeUndefined();
   });
 
   it('may be signed at the bench by itself: it is out of the basket then, and the counts agree', async () => {

@@ -256,12 +256,14 @@ describe('a value found outside its window afterwards', () => {
   });
 
   it('and a signature at the same instant are never both unseen', async () => {
-    for (let round = 0; round < 5; round += 1) {
+    for (let round = 0; round < 8; round += 1) {
       const made = await entered('25');
-      const { id } = await openedBasket(2, { partNumber, run: made.id, process: [] });
-      const parts = await freshParts(2, plan);
+      const { id } = await openedBasket(4, { partNumber, run: made.id, process: [] });
+      const parts = await freshParts(4, plan);
       for (const { serial } of parts) await scanInto(id, serial);
-      const [signed, changed] = await Promise.all([signWith(id, 2), changing(made.id, '12')]);
+      // The change meets the signature at another moment in each round.
+      const later = new Promise((done) => setTimeout(done, round * 15));
+      const [signed, changed] = await Promise.all([signWith(id, 4), later.then(() => changing(made.id, '12'))]);
       const standing = (await stateOf(parts[0]?.id ?? ''))?.state;
       if (changed.status === 200) expect([standing, signed.status]).not.toEqual(['met', 201]);
       else expect([changed.status, standing]).toEqual([409, 'met']);
