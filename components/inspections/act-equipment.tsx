@@ -1,7 +1,6 @@
 'use client';
 
 import { useMessages } from '@/components/theme/use-messages';
-import { Button } from '@/components/ui/button';
 import { Glyph } from '@/components/ui/glyph';
 import type { InspectionAnswer } from '@/services/contracts/inspections';
 
@@ -17,60 +16,59 @@ export interface ActEquipmentProps {
   readonly onChoose: (ids: string[]) => void;
 }
 
-/** The equipment of an act, several pieces where several were used, each with the state of its calibration in words. */
+function Named({ number, known, words }: { number: string; known: Equipment | undefined; words: string }) {
+  const good = known?.calibration.state === 'in-date';
+  return (
+    <>
+      <span className={good ? 'text-accept' : 'text-reject'}>
+        <Glyph name={good ? 'accept' : 'reject'} />
+      </span>
+      <span className="min-w-0 flex-1">
+        <strong className="font-mono">{number}</strong> {known?.title} <span className="text-ink-soft">{words}</span>
+      </span>
+    </>
+  );
+}
+
+/**
+ * The equipment of an act, several pieces where several were used, each with the state of its calibration in words.
+ * Boxes and no list to open: arrows in a list would take every piece that they pass.
+ */
 export function ActEquipment({ id, act, choices, chosen, readOnly, onChoose }: ActEquipmentProps) {
   const t = useMessages('inspections');
   const state = ({ calibration }: Equipment) =>
     t(`calibration.${calibration.state}`, { due: calibration.dueOn ?? '–', on: calibration.calibratedOn ?? '–' });
-  const free = choices.filter((one) => !chosen.includes(one.id));
+  const strangers = chosen.filter((one) => !choices.some((choice) => choice.id === one));
+  const rows = [
+    ...(readOnly ? choices.filter((one) => chosen.includes(one.id)) : choices).map((one) => ({ id: one.id, known: one })),
+    ...strangers.map((one) => ({ id: one, known: undefined })),
+  ];
   return (
-    <div className="flex min-w-0 flex-col gap-1">
-      {readOnly ? null : (
-        <label className="flex flex-col gap-0.5">
-          <span>{t('equipment', { act })}</span>
-          <select
-            id={id}
-            className="field"
-            value=""
-            onChange={(event) => {
-              if (event.target.value !== '') onChoose([...chosen, event.target.value]);
-            }}
-          >
-            <option value="">{chosen.length > 0 ? t('equipmentMore') : t('equipmentChoose')}</option>
-            {free.map((one) => (
-              <option key={one.id} value={one.id}>
-                {one.number} {one.title} – {state(one)}
-              </option>
-            ))}
-          </select>
-        </label>
-      )}
-      <ul>
-        {chosen.map((one) => {
-          const known = choices.find((choice) => choice.id === one);
-          const good = known?.calibration.state === 'in-date';
+    <fieldset id={id} tabIndex={-1} className="min-w-0">
+      <legend>{t('equipment', { act })}</legend>
+      <ul className="max-h-60 overflow-y-auto">
+        {rows.map((row) => {
+          const number = row.known?.number ?? row.id;
+          const words = row.known ? state(row.known) : t('equipmentUnknown');
           return (
-            <li key={one} className="flex items-center gap-2">
-              <span className={good ? 'text-accept' : 'text-reject'}>
-                <Glyph name={good ? 'accept' : 'reject'} />
-              </span>
-              <span className="min-w-0 flex-1">
-                <strong className="font-mono">{known?.number ?? one}</strong> {known?.title}{' '}
-                <span className="text-ink-soft">{known ? state(known) : t('equipmentUnknown')}</span>
-              </span>
-              {readOnly ? null : (
-                <Button
-                  kind="bare"
-                  aria-label={t('equipmentRemove', { number: known?.number ?? one, act })}
-                  onClick={() => onChoose(chosen.filter((other) => other !== one))}
-                >
-                  {t('remove')}
-                </Button>
-              )}
+            <li key={row.id}>
+              <label className="flex min-h-12 items-center gap-2">
+                {readOnly ? null : (
+                  <input
+                    type="checkbox"
+                    className="size-5 shrink-0"
+                    checked={chosen.includes(row.id)}
+                    onChange={(event) =>
+                      onChoose(event.target.checked ? [...chosen, row.id] : chosen.filter((other) => other !== row.id))
+                    }
+                  />
+                )}
+                <Named number={number} known={row.known} words={words} />
+              </label>
             </li>
           );
         })}
       </ul>
-    </div>
+    </fieldset>
   );
 }

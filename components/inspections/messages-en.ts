@@ -104,9 +104,6 @@ export const english = {
   removeOf: 'Remove indication {id}',
   rulesKept: '{count, plural, one {1 rule kept} other {# rules kept}}',
   equipment: 'Equipment for {act}',
-  equipmentChoose: 'Choose …',
-  equipmentMore: 'Add another …',
-  equipmentRemove: 'Remove {number} from {act}',
   equipmentUnknown: 'not known today',
   calibration: {
     'in-date': 'calibrated, due {due}',

@@ -104,9 +104,6 @@ export const french = {
   removeOf: 'Retirer l’indication {id}',
   rulesKept: '{count, plural, one {1 règle respectée} other {# règles respectées}}',
   equipment: 'Équipement pour {act}',
-  equipmentChoose: 'Choisir …',
-  equipmentMore: 'En ajouter un …',
-  equipmentRemove: 'Retirer {number} de {act}',
   equipmentUnknown: 'inconnu aujourd’hui',
   calibration: {
     'in-date': 'étalonné, échéance {due}',

@@ -39,7 +39,7 @@ export function RowsTable({ path, caption, columns, nameKey, fresh, addLabel }: 
       <PlanFault text={faultAt(path)} />
       {list.length === 0 ? <p className="text-ink-soft">{t('noRows')}</p> : null}
       {list.length === 0 ? null : (
-        <div className="overflow-x-auto" role="region" aria-label={caption} tabIndex={0}>
+        <div className="relative overflow-x-auto" role="region" aria-label={caption} tabIndex={0}>
           <table className="w-full border-collapse">
             <caption className="sr-only">{caption}</caption>
             <thead>

@@ -29,9 +29,8 @@ async function act(page: Page, name: string): Promise<void> {
 }
 
 async function equip(page: Page, actName: string, number: string): Promise<void> {
-  const select = page.getByLabel(`Equipment for ${actName}`);
-  const value = await select.locator('option', { hasText: number }).first().getAttribute('value');
-  await select.selectOption(value ?? '');
+  const pieces = page.getByRole('group', { name: `Equipment for ${actName}` });
+  await pieces.getByRole('checkbox', { name: new RegExp(`^${number}`) }).check();
 }
 
 async function block(page: Page, when: 'before' | 'after'): Promise<void> {

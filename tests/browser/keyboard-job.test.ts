@@ -44,7 +44,9 @@ async function begin({ page, keys }: Typist, title: string): Promise<void> {
 
 async function act({ page, keys }: Typist, name: string, equipment?: string): Promise<void> {
   await keys.tick(page.getByRole('checkbox', { name: new RegExp(`^${name}`) }));
-  if (equipment !== undefined) await keys.choose(page.getByLabel(`Equipment for ${name}`), equipment);
+  if (equipment === undefined) return;
+  const pieces = page.getByRole('group', { name: `Equipment for ${name}` });
+  await keys.tick(pieces.getByRole('checkbox', { name: new RegExp(`^${equipment}`) }));
 }
 
 async function conforms({ page, keys }: Typist, attribute: string): Promise<void> {
