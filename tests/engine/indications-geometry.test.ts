@@ -112,6 +112,20 @@ test(
   },
 );
 
+/** Caps of which the sampling misses more than half a micrometre: the exact length is 2·26 + √(286² + 973²) µm. */
+const cutShort: [DrawnShape, DrawnShape] = [
+  { kind: 'ellipse', center: [0, 0], axes: [1, 1], angle: 0 },
+  {
+    kind: 'polyline',
+    points: [
+      [-145, 0],
+      [141, 973],
+      [0, 0],
+    ],
+    width: 52,
+  },
+];
+
 test('calipers of a union agree with sampling in 720 directions', { timeout: 60_000 }, () => {
   fc.assert(
     fc.property(shape, shape, (one, other) => {
@@ -132,12 +146,13 @@ test('calipers of a union agree with sampling in 720 directions', { timeout: 60_
         least = Math.min(least, high - low);
       }
       expect(length).toBeGreaterThan(most - 1e-6);
-      expect(length).toBeLessThan(most + 0.5);
-      expect(width).toBeLessThan(least + 0.5);
+      // A sampled ring is cut short by r·(1 − cos(π/count)), at most 0.29 µm (near r = 15 µm), at either end.
+      expect(length).toBeLessThan(most + 0.6);
+      expect(width).toBeLessThan(least + 0.6);
       // Between two sampled directions 0.25° apart the width falls by at most the length times that angle.
-      expect(width).toBeGreaterThan(least - (length * Math.PI) / 720 - 0.5);
+      expect(width).toBeGreaterThan(least - (length * Math.PI) / 720 - 0.6);
     }),
-    { numRuns: 150 },
+    { numRuns: 150, examples: [cutShort] },
   );
 });
 
