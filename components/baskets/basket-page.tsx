@@ -6,6 +6,7 @@ import { useScans } from '@/components/scanner/page-scanner';
 import { useMessages } from '@/components/theme/use-messages';
 import { Button, LinkButton } from '@/components/ui/button';
 import { Notice, ProblemNotice } from '@/components/ui/notice';
+import { PageTitle } from '@/components/ui/page-title';
 import { Skeleton } from '@/components/ui/skeleton';
 import { StateWord } from '@/components/ui/state-word';
 import { When } from '@/components/ui/when';
@@ -28,6 +29,7 @@ function Head({ basket }: { basket: BasketAnswer }) {
   const { requirement, line, run } = basket;
   return (
     <header className="flex flex-wrap items-baseline gap-x-5 gap-y-0.5 border-b border-line-strong bg-raised px-3 py-1.5">
+      <PageTitle title={`${basket.number} ${basket.partNumber}`} />
       <h1 className="text-xl font-bold">
         <span className="font-mono">{basket.number}</span>{' '}
         <span className="font-normal">

@@ -23,7 +23,7 @@ describe('the bench keeps what was entered', () => {
     await beside.getByLabel('E-mail').fill('inspector2@aldermoor.example');
     await beside.getByLabel('Password').first().fill(demoPassword);
     await beside.getByRole('button', { name: 'Sign in' }).click();
-    await beside.waitForURL(/\/account$/);
+    await beside.waitForURL(({ pathname }) => pathname === '/account');
     await beside.close();
     await page.evaluate(() => window.dispatchEvent(new Event('focus')));
     await expect.poll(() => savedWords(page), { timeout: 40_000 }).toBe('Saved');
