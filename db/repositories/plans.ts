@@ -1,7 +1,7 @@
 import type { z } from 'zod';
 import { planContent, type Plan, type PlanContent, type planState } from '../../services/contracts/plan-content';
 import { table } from '../models/table';
-import { isoOf, select, selectOne, type Reading } from '../work';
+import { execute, isoOf, select, selectOne, type Reading, type Work } from '../work';
 
 export interface PlanIssueRow {
   id: string;
@@ -152,4 +152,23 @@ export async function requirementById(reading: Reading, requirementId: string): 
     [requirementId],
   );
   return row && { ...row, content: JSON.parse(row.content) as RequirementRow['content'] };
+}
+
+/** Did this person write any of the issue's content: prepared it, or saved the draft at any time? By the journal. */
+export async function wrotePlan(reading: Reading, planId: string, accountId: string): Promise<boolean> {
+  const row = await selectOne(
+    reading,
+    `SELECT 1 AS wrote FROM events WHERE subject_kind = 'plan' AND subject_id = ? AND kind IN ('plan-drafted', 'plan-changed') AND actor_id = ? LIMIT 1`,
+    [planId, accountId],
+  );
+  return row !== undefined;
+}
+
+/** Takes the drawing revision of an issue, so that its issues are approved one after the other. */
+export async function takeRevisionOfPlan(work: Work, planId: string): Promise<void> {
+  await execute(
+    work,
+    'UPDATE drawings d JOIN drawing_revisions r ON r.drawing_id = d.id JOIN plan_issues p ON p.drawing_revision_id = r.id SET d.version = d.version + 1 WHERE p.id = ?',
+    [planId],
+  );
 }

@@ -1,7 +1,7 @@
 import { newId } from '@/db/identity';
-import { execute, select, sqlTimeOf, type Work } from '@/db/work';
+import { execute, select, selectOne, sqlTimeOf, type Work } from '@/db/work';
 import { insertAll, update } from '@/db/models/table';
-import { planById, planIssues, requirements } from '@/db/repositories/plans';
+import { planById, planIssues, requirements, takeRevisionOfPlan, wrotePlan } from '@/db/repositories/plans';
 import type { Actor } from '@/services/contracts/actor';
 import { contentOf, type Plan, type PlanContent } from '@/services/contracts/plan-content';
 import { notFound, Problem } from '@/services/http/problem';
@@ -71,11 +71,28 @@ function refuseFaults(plan: Plan): void {
     );
 }
 
+/** An issue that was overtaken by a newer approved one would take its place under the older number. */
+async function refuseOvertaken(work: By, plan: Plan): Promise<void> {
+  const newer = await selectOne<{ issue: number }>(
+    work,
+    `SELECT o.issue FROM plan_issues o JOIN plan_issues n ON n.drawing_revision_id = o.drawing_revision_id WHERE n.id = ? AND o.issue > n.issue AND o.state = 'approved'`,
+    [plan.id],
+  );
+  if (newer)
+    throw new Problem(
+      'state-refused',
+      `Issue ${String(newer.issue)} of this drawing revision is approved already; issue ${String(plan.issue)} comes too late.`,
+    );
+}
+
+const wroteIt = async (work: By, plan: Plan): Promise<boolean> =>
+  plan.prepared?.id === work.actor.id || (await wrotePlan(work, plan.id, work.actor.id));
+
 /** A second person states that the draft reads the drawing rightly. */
 export async function checkPlan(work: By, planId: string): Promise<Recorded<Plan>> {
   const plan = await takePlan(work, planId, 'check');
-  if (plan.prepared?.id === work.actor.id)
-    throw new Problem('not-permitted', 'A plan issue is checked by a second person, not by who prepared it.');
+  if (await wroteIt(work, plan))
+    throw new Problem('not-permitted', 'A plan issue is checked by a second person, not by anybody who wrote any of it.');
   refuseFaults(plan);
   await update(work, planIssues, { state: 'checked', checkedBy: work.actor.id, checkedAt: work.now }, { id: planId });
   return answered(work, plan, {});
@@ -83,9 +100,11 @@ export async function checkPlan(work: By, planId: string): Promise<Recorded<Plan
 
 /** Approves a checked issue: the route becomes requirement rows, an earlier approved issue of the revision is superseded. */
 export async function approvePlan(work: By, planId: string): Promise<Recorded<Plan>> {
+  await takeRevisionOfPlan(work, planId);
   const plan = await takePlan(work, planId, 'approve');
-  if (plan.prepared?.id === work.actor.id) throw new Problem('not-permitted', 'Nobody approves a plan issue they prepared.');
+  if (await wroteIt(work, plan)) throw new Problem('not-permitted', 'Nobody approves a plan issue of which they wrote any.');
   refuseFaults(plan);
+  await refuseOvertaken(work, plan);
   await update(work, planIssues, { state: 'approved', approvedBy: work.actor.id, approvedAt: work.now }, { id: planId });
   const earlier = await select<{ id: string }>(
     work,

@@ -187,6 +187,41 @@ describe('a plan issue', () => {
     expect(first.issue).toBe(1);
   });
 
+  it('is neither checked nor approved by anybody who rewrote it', async () => {
+    const plan = await drafted(await drawn());
+    const body = { ...content, rework: [{ kind: 'blend', title: 'Blend' }] };
+    const headers = { 'if-match': `"${String(plan.version)}"` };
+    const rewritten = await call(change, { method: 'PUT', as: checker, params: { id: plan.id }, body, headers });
+    expect(rewritten.status).toBe(200);
+    expect((await move(check, plan, checker)).status).toBe(403);
+    expect((await move(check, plan, approver)).status).toBe(200);
+    expect((await move(approve, plan, checker, sign)).status).toBe(403);
+  });
+
+  it(
+    'is the only approved one of its revision, also when two issues are approved at the same moment',
+    { timeout: 60_000 },
+    async () => {
+      const number = await drawn();
+      for (let round = 0; round < 10; round += 1) {
+        const [a, b] = [await drafted(number), await drafted(number)];
+        await Promise.all([move(check, a, checker), move(check, b, checker)]);
+        await Promise.all([move(approve, a, approver, sign), move(approve, b, checker, sign)]);
+        const { json } = await call(plansOf, { as: checker, params: { number } });
+        const standing = (json as { items: Plan[] }).items.filter(({ state }) => state === 'approved');
+        expect(standing.map(({ issue }) => issue)).toEqual([b.issue]);
+      }
+    },
+  );
+
+  it('comes too late when a newer issue is approved', async () => {
+    const number = await drawn();
+    const [older, newer] = [await drafted(number), await drafted(number)];
+    for (const plan of [older, newer]) await move(check, plan, checker);
+    expect((await move(approve, newer, approver, sign)).status).toBe(200);
+    expect((await move(approve, older, approver, sign)).problem).toBe('state-refused');
+  });
+
   it('is withdrawn for error with a reason, and stays readable', async () => {
     const plan = await approved(await drawn());
     expect((await move(withdraw, plan, approver, { ...sign, reason: 'no' })).errors.map(({ path }) => path)).toEqual(['reason']);
